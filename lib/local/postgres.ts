@@ -31,6 +31,7 @@ export interface Cluster {
   /** Creates a database when it is missing, as a copy of `template` when given. */
   createDatabase(database: string, template?: string): Promise<void>;
   dropDatabase(database: string): Promise<void>;
+  renameDatabase(database: string, name: string): Promise<void>;
   listDatabases(): Promise<string[]>;
   /** Gives the server up; it is shut down when no other process uses it. */
   stop(): Promise<void>;
@@ -402,6 +403,10 @@ function clusterOf(record: ClusterRecord, port: number, note: string, stop: () =
     dropDatabase: (database) =>
       asOwner(async (sql) => {
         await sql`drop database if exists ${sql(database)} with (force)`;
+      }),
+    renameDatabase: (database, name) =>
+      asOwner(async (sql) => {
+        await sql`alter database ${sql(database)} rename to ${sql(name)}`;
       }),
     listDatabases: () =>
       asOwner(async (sql) => {
