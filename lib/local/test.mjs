@@ -1,0 +1,3 @@
+import { handOver } from './hand-over.mjs';
+
+handOver('tests.ts');
