@@ -96,10 +96,10 @@ async function endGroup(leader: Identity, patience: number): Promise<void> {
 
 export type Variables = Record<string, string | undefined>;
 
-/** Children always know their mode; what is not said to be production is development. */
+/** Children always know their mode; what is not said to be production or a test is development. */
 const withMode = (env: Variables): NodeJS.ProcessEnv => ({
   ...env,
-  NODE_ENV: env.NODE_ENV === 'production' ? 'production' : 'development',
+  NODE_ENV: env.NODE_ENV === 'production' || env.NODE_ENV === 'test' ? env.NODE_ENV : 'development',
 });
 
 const recordShape = z.array(identityShape.extend({ name: z.string() }));
@@ -149,13 +149,13 @@ export class ProcessKeeper {
     return left.length;
   }
 
-  /** Starts a program; what it prints goes to `<name>.log`, and on to our own output when `echo` is set. */
+  /** Starts a program; what it prints goes to `<name>.log`, also to our output with `echo`, only there with `terminal`. */
   start(
     name: string,
     command: string,
     args: string[],
     env: Variables,
-    { echo = false }: { echo?: boolean } = {},
+    { echo = false, terminal = false }: { echo?: boolean; terminal?: boolean } = {},
   ): Child {
     if (this.stopping) throw new SetupFault('Stopped before everything had started.');
     const logFile = `${this.logFolder}/${name}.log`;
@@ -165,7 +165,7 @@ export class ProcessKeeper {
       cwd: root,
       env: withMode(env),
       detached: true,
-      stdio: ['ignore', log, log],
+      stdio: terminal ? ['ignore', 'inherit', 'inherit'] : ['ignore', log, log],
     });
     closeSync(log);
     const ended = new Promise<string>((resolve) => {

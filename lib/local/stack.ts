@@ -10,24 +10,36 @@ import {
   type Service,
 } from './environment';
 import type { FakesPlan } from './fakes';
-import { lockedBy, tryLock } from './holders';
 import { localFolder, root, writePrivately } from './places';
-import { ensurePostgres, type Cluster } from './postgres';
+import { ensurePostgres, type Cluster, type ClusterName } from './postgres';
 import { ProcessKeeper, type Child, type Variables } from './processes';
-import { printFault, SetupFault, step } from './progress';
-import { loadSettings, type Settings } from './settings';
+import { SetupFault, step } from './progress';
+import { loadSettings, type Ports, type Settings } from './settings';
 
 const TSX = ['--import', 'tsx'];
 const TSX_WATCH = ['node_modules/tsx/dist/cli.mjs', 'watch', '--clear-screen=false'];
 const NEXT = 'node_modules/next/dist/bin/next';
 
 export interface StackOptions {
-  /** Whose folder under `.local`, and which PostgreSQL cluster. */
-  readonly name: 'demo';
+  /** Its folder below `.local`. */
+  readonly folder: readonly string[];
+  readonly cluster: ClusterName;
+  readonly database: string;
+  /** Where it listens unless others do. */
+  readonly preferredPorts: Ports;
+  /** Variables that may name real services in place of what stands in. */
+  readonly surroundings: Variables;
   /** Source changes show at once; nothing is built. */
   readonly dev: boolean;
   /** Forget the demo: its database, and what the fakes remember. */
   readonly reset: boolean;
+}
+
+export interface RunningStack {
+  readonly settings: Settings;
+  readonly real: ReadonlySet<Service>;
+  /** All that a test or a command run by hand needs to reach it. */
+  readonly variables: Record<string, string>;
 }
 
 /** Everything that runs on this machine for one address. */
@@ -35,42 +47,47 @@ export class Stack {
   private readonly folder: string;
   private readonly keeper: ProcessKeeper;
   private cluster: Promise<Cluster> | null = null;
-  private watched: Child[] = [];
+  private readonly watched: Child[] = [];
   private stopped: Promise<void> | null = null;
 
   constructor(private readonly options: StackOptions) {
-    this.folder = localFolder(options.name);
+    this.folder = localFolder(...options.folder);
     this.keeper = new ProcessKeeper(
       path.join(this.folder, 'processes.json'),
-      localFolder(options.name, 'logs'),
+      localFolder(...options.folder, 'logs'),
     );
   }
 
   /** Starts all of it in order. Throws `SetupFault`; whatever had been started is then still to be stopped. */
-  async start(): Promise<{ settings: Settings; real: ReadonlySet<Service> }> {
+  async start(): Promise<RunningStack> {
     const { keeper, options } = this;
-    const real = realServices(process.env);
+    const real = realServices(options.surroundings);
     const leftovers = await keeper.endLeftovers();
     if (leftovers > 0)
       console.log(`  Ended ${leftovers} process group(s) that an earlier run had left behind`);
-    const settings = await loadSettings(this.folder);
+    const settings = await loadSettings(this.folder, options.preferredPorts);
 
-    let databaseUrl = process.env.DATABASE_URL ?? '';
-    let databaseOwnerUrl = process.env.DATABASE_OWNER_URL ?? '';
+    let databaseUrl = options.surroundings.DATABASE_URL ?? '';
+    let databaseOwnerUrl = options.surroundings.DATABASE_OWNER_URL ?? '';
     if (!real.has('postgres')) {
-      const cluster = await step('PostgreSQL', () => (this.cluster = ensurePostgres({ name: options.name })));
-      if (options.reset) await cluster.dropDatabase('stilewright');
-      await cluster.createDatabase('stilewright');
-      databaseUrl = cluster.appUrl('stilewright');
-      databaseOwnerUrl = cluster.ownerUrl('stilewright');
+      const cluster = await step(
+        'PostgreSQL',
+        () => (this.cluster = ensurePostgres({ name: options.cluster })),
+      );
+      if (options.reset) await cluster.dropDatabase(options.database);
+      await cluster.createDatabase(options.database);
+      databaseUrl = cluster.appUrl(options.database);
+      databaseOwnerUrl = cluster.ownerUrl(options.database);
     }
-    const variables = programVariables(settings, { databaseUrl }, real, process.env);
-    const environment = { ...plainSurroundings(process.env), ...variables };
+    const variables = programVariables(settings, { databaseUrl }, real, options.surroundings);
+    const environment = { ...plainSurroundings(options.surroundings), ...variables };
     const ownerEnvironment = { ...environment, DATABASE_OWNER_URL: databaseOwnerUrl };
-    writePrivately(
-      path.join(this.folder, 'environment.sh'),
-      asShell({ ...variables, DATABASE_OWNER_URL: databaseOwnerUrl }),
-    );
+    const reach = {
+      ...variables,
+      DATABASE_OWNER_URL: databaseOwnerUrl,
+      MAILBOX_ORIGIN: origins(settings).mailbox,
+    };
+    writePrivately(path.join(this.folder, 'environment.sh'), asShell(reach));
 
     await this.script(
       'Migrations',
@@ -97,7 +114,7 @@ export class Stack {
       await untilAnswers(origins(settings).web, web);
       return origins(settings).web;
     });
-    return { settings, real };
+    return { settings, real, variables: reach };
   }
 
   /** Settles when a part of the running stack ends on its own, with a sentence about it. */
@@ -113,11 +130,12 @@ export class Stack {
     );
   }
 
-  /** Ends everything, whatever state the start had reached. */
-  stop(): Promise<void> {
+  /** Ends everything, whatever state the start had reached; `forget` drops its database too. */
+  stop(forget = false): Promise<void> {
     this.stopped ??= (async () => {
       await this.keeper.stop();
       const cluster = await this.cluster?.catch(() => null);
+      if (forget) await cluster?.dropDatabase(this.options.database);
       await cluster?.stop();
     })();
     return this.stopped;
@@ -143,12 +161,12 @@ export class Stack {
     await step('Fakes', async () => {
       const stateFolder = path.join(this.folder, 'fakes');
       if (this.options.reset) rmSync(stateFolder, { recursive: true, force: true });
-      localFolder(this.options.name, 'fakes');
+      localFolder(...this.options.folder, 'fakes');
       const plan: FakesPlan = { settings, stateFolder, fakes };
       const planFile = path.join(this.folder, 'fakes.json');
       writePrivately(planFile, JSON.stringify(plan, null, 2));
       const run = this.options.dev ? TSX_WATCH : TSX;
-      const env = plainSurroundings(process.env);
+      const env = plainSurroundings(this.options.surroundings);
       const child = this.keeper.start(
         'fakes',
         process.execPath,
@@ -208,58 +226,3 @@ export async function untilAnswers(origin: string, child: Child): Promise<void> 
     }
   }
 }
-
-function printReady(
-  { settings, real }: { settings: Settings; real: ReadonlySet<Service> },
-  dev: boolean,
-): void {
-  const at = origins(settings);
-  console.log(`\nStilewright ${dev ? '(development) ' : ''}is running.\n\n  Address   ${at.web}`);
-  if (!real.has('mail')) console.log(`  Mailbox   ${at.mailbox}`);
-  console.log('\nCtrl-C stops everything.');
-}
-
-async function main(): Promise<number> {
-  const args = process.argv.slice(2);
-  const unknown = args.filter((arg) => arg !== '--dev' && arg !== '--reset');
-  if (unknown.length > 0) {
-    console.error(
-      `Unknown: ${unknown.join(' ')}. Known are --dev (show source changes at once) and --reset (forget the demo).`,
-    );
-    return 1;
-  }
-  const dev = args.includes('--dev');
-  const lockFile = path.join(localFolder('demo'), 'stack.lock');
-  const release = tryLock(lockFile);
-  if (!release) {
-    console.error(
-      `Stilewright already runs from this folder (process ${lockedBy(lockFile)?.pid ?? 'unknown'}). Stop it first.`,
-    );
-    return 1;
-  }
-
-  const stack = new Stack({ name: 'demo', dev, reset: args.includes('--reset') });
-  const interrupted = new Promise<'interrupted'>((resolve) => {
-    for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP', 'disconnect'] as const)
-      process.on(signal, () => resolve('interrupted'));
-  });
-  try {
-    console.log('Stilewright');
-    const started = await Promise.race([interrupted, stack.start()]);
-    if (started === 'interrupted') return 0;
-    printReady(started, dev);
-    const ending = await Promise.race([interrupted, stack.failure()]);
-    if (ending === 'interrupted') return 0;
-    printFault(ending);
-    return 1;
-  } catch (error) {
-    printFault(error);
-    return 1;
-  } finally {
-    console.log('\nStopping ...');
-    await stack.stop();
-    release();
-  }
-}
-
-void main().then((code) => process.exit(code));

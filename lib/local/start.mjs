@@ -1,3 +1,3 @@
 import { handOver } from './hand-over.mjs';
 
-handOver('stack.ts');
+handOver('start.ts');
