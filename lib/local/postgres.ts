@@ -103,7 +103,8 @@ function chooseDataFolder(name: ClusterName, account: Account | null): string {
 function initialise(dataFolder: string, password: string, account: Account | null): void {
   const fresh = `${dataFolder}.new`;
   for (const folder of [dataFolder, fresh]) fs.rmSync(folder, { recursive: true, force: true });
-  fs.mkdirSync(fresh, { recursive: true, mode: 0o700 });
+  fs.mkdirSync(path.dirname(fresh), { recursive: true });
+  fs.mkdirSync(fresh, { mode: 0o700 });
   // initdb reopens its password file, which a pipe would not allow.
   const passwordFolder = fs.mkdtempSync(path.join(os.tmpdir(), 'stilewright-'));
   const passwordFile = path.join(passwordFolder, 'password');
