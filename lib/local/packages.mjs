@@ -36,12 +36,16 @@ export function ensurePackages(root) {
   if (packagesAreCurrent(root)) return true;
   const started = Date.now();
   if (process.stdout.isTTY) process.stdout.write('  Packages: npm ci ...');
-  const run = spawnSync('npm', ['ci', '--include=dev', '--no-audit', '--no-fund', '--loglevel=error'], {
-    cwd: root,
-    stdio: ['ignore', 'pipe', 'pipe'],
-    encoding: 'utf8',
-    env: { ...process.env, NODE_ENV: '' },
-  });
+  const run = spawnSync(
+    'npm',
+    ['ci', '--include=dev', '--ignore-scripts', '--no-audit', '--no-fund', '--loglevel=error'],
+    {
+      cwd: root,
+      stdio: ['ignore', 'pipe', 'pipe'],
+      encoding: 'utf8',
+      env: { ...process.env, NODE_ENV: '' },
+    },
+  );
   if (process.stdout.isTTY) process.stdout.write('\r\x1b[K');
   if (run.status !== 0) {
     const reason = run.error ? run.error.message : run.stderr.trim();

@@ -33,6 +33,8 @@ export interface Cluster {
   dropDatabase(database: string): Promise<void>;
   renameDatabase(database: string, name: string): Promise<void>;
   listDatabases(): Promise<string[]>;
+  /** Whether the server still runs. */
+  runs(): boolean;
   /** Gives the server up; it is shut down when no other process uses it. */
   stop(): Promise<void>;
 }
@@ -415,6 +417,7 @@ function clusterOf(record: ClusterRecord, port: number, note: string, stop: () =
           select datname from pg_database where datdba = (select oid from pg_roles where rolname = 'app_owner')`;
         return rows.map((row) => row.datname);
       }),
+    runs: () => serverState(record.dataFolder).kind === 'running',
     stop,
   };
 }

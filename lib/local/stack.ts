@@ -1,5 +1,6 @@
 import { existsSync, rmSync } from 'node:fs';
 import path from 'node:path';
+import { setTimeout as wait } from 'node:timers/promises';
 import { ensureBuild } from './build';
 import {
   asShell,
@@ -119,15 +120,18 @@ export class Stack {
 
   /** Settles when a part of the running stack ends on its own, with a sentence about it. */
   async failure(): Promise<SetupFault> {
-    return Promise.race(
-      this.watched.map(async (child) => {
-        const outcome = await child.ended;
-        return new SetupFault(
-          `The ${child.name} process ${outcome}, so everything is stopped.`,
-          child.tail(),
-        );
-      }),
-    );
+    const children = this.watched.map(async (child) => {
+      const outcome = await child.ended;
+      return new SetupFault(`The ${child.name} process ${outcome}, so everything is stopped.`, child.tail());
+    });
+    return Promise.race([...children, this.databaseFailure()]);
+  }
+
+  private async databaseFailure(): Promise<SetupFault> {
+    const cluster = await this.cluster;
+    // The server is nobody's child here when it was taken over, so it is looked at instead of awaited.
+    while (!cluster || cluster.runs()) await wait(2000);
+    return new SetupFault('PostgreSQL ended on its own, so everything is stopped.');
   }
 
   /** Ends everything, whatever state the start had reached; `forget` drops its database too. */
@@ -222,7 +226,7 @@ export async function untilAnswers(origin: string, child: Child): Promise<void> 
           child.tail(),
         );
       }
-      await new Promise((resolve) => setTimeout(resolve, 100));
+      await wait(100);
     }
   }
 }

@@ -29,7 +29,7 @@ ul.mails a:hover strong { text-decoration: underline; text-underline-offset: 3px
 ul.mails strong { font-weight: 650; overflow-wrap: anywhere; } ul.mails span { color: var(--quiet); font-size: 15px; line-height: 22px; overflow-wrap: anywhere; }
 ul.mails time { font-variant-numeric: tabular-nums; }
 .flush { padding: 0; }
-iframe { display: block; width: 100%; height: 70vh; border: 0; background: #fff; }
+iframe { display: block; width: 100%; height: 55vh; border: 0; background: #fff; }
 dl { display: grid; grid-template-columns: auto minmax(0, 1fr); gap: 2px 20px; margin: 12px 0 0; } dt { color: var(--quiet); } dd { margin: 0; overflow-wrap: anywhere; }
 pre { margin: 0; white-space: pre-wrap; overflow-wrap: anywhere; font: inherit; }
 @media (max-width: 600px) { body { padding: 6px; } .frame { gap: 6px; } ul.mails a { grid-template-columns: minmax(0, 1fr); } }
