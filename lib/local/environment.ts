@@ -24,22 +24,23 @@ const SERVICES = ['postgres', 'clerk', 'stripe', 'mail'] as const;
  * any that is not named when `NODE_ENV` says production: there, nothing may stand in.
  */
 export function realServices(source: Variables): ReadonlySet<Service> {
-  const real = new Set<Service>();
-  for (const service of SERVICES) {
-    const { name, variables } = REPLACEABLE[service];
-    const missing = variables.filter((variable) => !source[variable]);
-    if (missing.length === 0) real.add(service);
-    else if (missing.length < variables.length) {
-      throw new SetupFault(
-        `${name} is only named in part. Also set ${missing.join(', ')}, or none of its variables.`,
-      );
-    } else if (source.NODE_ENV === 'production') {
-      throw new SetupFault(
-        `NODE_ENV is production, where nothing stands in for ${name}. Set ${missing.join(', ')}.`,
-      );
-    }
+  const missing = (service: Service) =>
+    REPLACEABLE[service].variables.filter((variable) => !source[variable]);
+  const absent = SERVICES.filter((service) => missing(service).length > 0);
+  const halved = absent.find((service) => missing(service).length < REPLACEABLE[service].variables.length);
+  if (halved) {
+    const { name } = REPLACEABLE[halved];
+    throw new SetupFault(
+      `${name} is only named in part. Also set ${missing(halved).join(', ')}, or none of its variables.`,
+    );
   }
-  return real;
+  if (source.NODE_ENV === 'production' && absent.length > 0) {
+    throw new SetupFault(
+      'NODE_ENV is production, where nothing stands in for a real service. Set these variables too:',
+      absent.flatMap(missing).join('\n'),
+    );
+  }
+  return new Set(SERVICES.filter((service) => !absent.includes(service)));
 }
 
 /** Read by the libraries themselves. The first four are taken into the build, so they are the same on every machine. */
@@ -49,6 +50,9 @@ export const BUILD_VARIABLES = {
   NEXT_PUBLIC_CLERK_PREFETCH_UI: 'false',
   NEXT_TELEMETRY_DISABLED: '1',
 } as const;
+
+/** Set in what a stack writes for the shell: the variables beside it name its stand-ins, no real service. */
+export const FROM_A_STACK = 'STILEWRIGHT_FROM_A_STACK';
 
 export interface Addresses {
   readonly databaseUrl: string;

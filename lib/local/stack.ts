@@ -4,6 +4,7 @@ import { setTimeout as wait } from 'node:timers/promises';
 import { ensureBuild } from './build';
 import {
   asShell,
+  FROM_A_STACK,
   origins,
   plainSurroundings,
   programVariables,
@@ -84,6 +85,7 @@ export class Stack {
     const environment = { ...plainSurroundings(options.surroundings), ...variables };
     const ownerEnvironment = { ...environment, DATABASE_OWNER_URL: databaseOwnerUrl };
     const reach = {
+      [FROM_A_STACK]: '1',
       ...variables,
       DATABASE_OWNER_URL: databaseOwnerUrl,
       MAILBOX_ORIGIN: origins(settings).mailbox,
@@ -116,6 +118,11 @@ export class Stack {
       return origins(settings).web;
     });
     return { settings, real, variables: reach };
+  }
+
+  /** Whether there is anything to stop. */
+  get hasBegun(): boolean {
+    return this.cluster !== null || this.watched.length > 0;
   }
 
   /** Settles when a part of the running stack ends on its own, with a sentence about it. */

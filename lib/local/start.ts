@@ -1,5 +1,5 @@
 import path from 'node:path';
-import { origins, type Service } from './environment';
+import { FROM_A_STACK, origins, plainSurroundings, type Service } from './environment';
 import { lockedBy, tryLock } from './holders';
 import { localFolder } from './places';
 import { printFault } from './progress';
@@ -40,7 +40,7 @@ async function main(): Promise<number> {
     cluster: 'demo',
     database: 'stilewright',
     preferredPorts: PREFERRED_PORTS,
-    surroundings: process.env,
+    surroundings: process.env[FROM_A_STACK] ? plainSurroundings(process.env) : process.env,
     dev,
     reset: args.includes('--reset'),
   });
@@ -61,7 +61,7 @@ async function main(): Promise<number> {
     printFault(error);
     return 1;
   } finally {
-    console.log('\nStopping ...');
+    if (stack.hasBegun) console.log('\nStopping ...');
     await stack.stop();
     release();
   }
