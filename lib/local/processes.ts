@@ -1,11 +1,13 @@
 import { spawn, type ChildProcess } from 'node:child_process';
 import {
   closeSync,
+  existsSync,
   openSync,
   readdirSync,
   readFileSync,
   readlinkSync,
   realpathSync,
+  renameSync,
   statSync,
 } from 'node:fs';
 import { setTimeout as wait } from 'node:timers/promises';
@@ -94,6 +96,8 @@ async function endGroup(leader: Identity, patience: number): Promise<void> {
   send('SIGKILL');
 }
 
+const MAX_LOG_BYTES = 5_000_000;
+
 export type Variables = Record<string, string | undefined>;
 
 /** Children always know their mode; what is not said to be production or a test is development. */
@@ -159,6 +163,8 @@ export class ProcessKeeper {
   ): Child {
     if (this.stopping) throw new SetupFault('Stopped before everything had started.');
     const logFile = `${this.logFolder}/${name}.log`;
+    // Logs grow over many starts; one older piece is kept.
+    if (existsSync(logFile) && statSync(logFile).size > MAX_LOG_BYTES) renameSync(logFile, `${logFile}.old`);
     const log = openSync(logFile, 'a', 0o600);
     const from = statSync(logFile).size;
     const child = spawn(command, args, {
