@@ -4,6 +4,7 @@ import { pathToFileURL } from 'node:url';
 import { z } from 'zod';
 import { MAIL_DOMAIN, origins } from './environment';
 import { startMailFake } from './mail/server';
+import { startStripeFake } from './stripe/server';
 import { settingsShape, type Settings } from './settings';
 
 /** What the process of the fakes is told: which of them to start, and where they keep their state. */
@@ -18,18 +19,15 @@ interface Fake {
   stop(): Promise<void>;
 }
 
-const LOADED: Record<'clerk' | 'stripe', string> = {
-  clerk: 'startClerkFake',
-  stripe: 'startStripeFake',
-};
-
-async function startOther(name: 'clerk' | 'stripe', options: unknown): Promise<Fake[]> {
-  const file = path.join(__dirname, name, 'server.ts');
+/** Until the sign-in service's stand-in is there, the others run without it. */
+async function startClerk(options: unknown): Promise<Fake[]> {
+  const file = path.join(__dirname, 'clerk', 'server.ts');
   if (!existsSync(file)) return [];
-  const loaded: Record<string, unknown> = await import(pathToFileURL(file).href);
-  const start = loaded[LOADED[name]];
-  if (typeof start !== 'function') return [];
-  return [await start(options)];
+  const loaded: Record<string, unknown> = await import(pathToFileURL(file).href).catch((error: unknown) => {
+    console.error(error);
+    return {};
+  });
+  return typeof loaded.startClerkFake === 'function' ? [await loaded.startClerkFake(options)] : [];
 }
 
 function clerkOptions(settings: Settings, stateFolder: string) {
@@ -73,10 +71,8 @@ async function main(planFile: string): Promise<void> {
       }),
     );
   }
-  if (fakes.includes('clerk'))
-    started.push(...(await startOther('clerk', clerkOptions(settings, stateFolder))));
-  if (fakes.includes('stripe'))
-    started.push(...(await startOther('stripe', stripeOptions(settings, stateFolder))));
+  if (fakes.includes('clerk')) started.push(...(await startClerk(clerkOptions(settings, stateFolder))));
+  if (fakes.includes('stripe')) started.push(await startStripeFake(stripeOptions(settings, stateFolder)));
   console.log('ready');
   let stopping = false;
   for (const signal of ['SIGTERM', 'SIGINT'] as const) {
