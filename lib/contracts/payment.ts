@@ -61,7 +61,8 @@ export const drawViewShape = z.object({
   /** What was received for it, and what of that was given back. */
   receivedCents: cents,
   refundedCents: cents,
-  card: z.object({ brand: z.string(), lastFour: z.string() }).nullable(),
+  /** What the ledger says of its last payment, such as "Payment 1 of 4, Visa ending in 4242". */
+  receipt: z.string().nullable(),
 });
 export type DrawView = z.infer<typeof drawViewShape>;
 
