@@ -11,7 +11,8 @@ export const inFull = (calendarDate: string): string =>
     new Date(`${calendarDate}T12:00:00Z`),
   );
 
-export const drawName = ({ number, of }: Pick<DrawView, 'number' | 'of'>): string => `Payment ${number} of ${of}`;
+export const drawName = ({ number, of }: Pick<DrawView, 'number' | 'of'>): string =>
+  `Payment ${number} of ${of}`;
 
 const WHEN: Readonly<Record<DrawView['due'], string>> = {
   signing: 'when the agreement is signed',

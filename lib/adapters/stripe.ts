@@ -60,15 +60,30 @@ const STATUSES: Readonly<Record<string, PaymentStatus>> = {
   canceled: 'canceled',
 };
 
+const CARD_NAMES: Readonly<Record<string, string>> = {
+  amex: 'American Express',
+  diners: 'Diners Club',
+  discover: 'Discover',
+  jcb: 'JCB',
+  mastercard: 'Mastercard',
+  unionpay: 'UnionPay',
+  visa: 'Visa',
+};
+
+function payerOf(details: Stripe.Charge.PaymentMethodDetails | null) {
+  const { card, us_bank_account: bank } = details ?? {};
+  if (card?.last4) return { name: CARD_NAMES[card.brand ?? ''] ?? 'Card', lastFour: card.last4 };
+  return bank?.last4 ? { name: 'Bank account', lastFour: bank.last4 } : null;
+}
+
 function chargeOf(intent: Stripe.PaymentIntent): IntentSnapshot['charge'] {
   const charge = intent.latest_charge;
   if (!charge || typeof charge === 'string' || charge.status !== 'succeeded') return null;
-  const card = charge.payment_method_details?.card;
   return {
     id: charge.id,
     at: new Date(charge.created * 1000),
     refundedCents: charge.amount_refunded,
-    card: card?.last4 ? { brand: card.brand ?? 'card', lastFour: card.last4 } : null,
+    by: payerOf(charge.payment_method_details),
   };
 }
 

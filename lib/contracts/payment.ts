@@ -28,7 +28,8 @@ export interface IntentSnapshot {
     readonly id: string;
     readonly at: Date;
     readonly refundedCents: number;
-    readonly card: { readonly brand: string; readonly lastFour: string } | null;
+    /** Whose money it was, such as "Visa" ending in 4242. */
+    readonly by: { readonly name: string; readonly lastFour: string } | null;
   } | null;
   /** Why the last try failed. */
   readonly decline: { readonly code: string; readonly declineCode: string | null } | null;

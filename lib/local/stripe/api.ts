@@ -1,5 +1,5 @@
 import { randomBytes } from 'node:crypto';
-import { findCard, METHOD_TOKENS, type Card } from './cards';
+import { DEBIT_TOKENS, findCard, METHOD_TOKENS, type CardOutcome, type Debit } from './cards';
 import { ApiFault, invalid, missing } from './fault';
 import { listAt, recordAt, textAt, type FormRecord } from './form';
 import {
@@ -33,6 +33,8 @@ interface Call extends Asked {
   readonly id: string;
 }
 
+type Refusal = Extract<CardOutcome, { kind: 'declines' }>;
+type Outcome = CardOutcome | ({ readonly kind: 'debits' } & Debit);
 type Handler = (call: Call) => unknown;
 type Route = readonly [method: string, pattern: RegExp, handler: Handler, publicly?: 'publicly'];
 
@@ -83,6 +85,8 @@ export class Api {
         (call) => this.answerChallenge(call),
         'publicly',
       ],
+      ['POST', /^\/_fake\/payment_intents\/([^/]+)\/arrive$/, (call) => this.arriveDebit(call)],
+      ['POST', /^\/_fake\/refunds\/([^/]+)\/fail$/, (call) => this.failRefund(call)],
       ['GET', /^\/v1\/charges\/([^/]+)$/, ({ book, id }) => found(book.charges, id, 'charge')],
       ['POST', /^\/v1\/refunds$/, (call) => this.createRefund(call)],
       ['GET', /^\/v1\/refunds$/, (call) => listRefunds(call)],
@@ -219,9 +223,21 @@ export class Api {
 
   private confirm(call: Call, intent: PaymentIntent): void {
     if (!CONFIRMABLE.has(intent.status)) throw unexpectedState(intent, 'confirm');
-    const { card, method } = methodOf(call);
+    const { outcome, method } = methodOf(call);
     call.book.paymentMethods[method.id] = method;
-    if (card.outcome.kind === 'asks') {
+    if (outcome.kind === 'debits') {
+      const charge = this.newCharge(call, intent, method, 'pending');
+      Object.assign(intent, {
+        status: 'processing',
+        payment_method: method.id,
+        last_payment_error: null,
+        next_action: null,
+      });
+      this.tell(call, 'charge.pending', charge);
+      this.tell(call, 'payment_intent.processing', intent);
+      return;
+    }
+    if (outcome.kind === 'asks') {
       Object.assign(intent, {
         status: 'requires_action',
         payment_method: method.id,
@@ -231,7 +247,27 @@ export class Api {
       this.tell(call, 'payment_intent.requires_action', intent);
       return;
     }
-    this.charge(call, intent, card, method);
+    this.charge(call, intent, method, outcome.kind === 'declines' ? outcome : null);
+  }
+
+  /** A bank debit arrives, or comes back unpaid, as the account that was named decides. */
+  private arriveDebit(call: Call) {
+    const intent = intentOf(call);
+    const method = call.book.paymentMethods[intent.payment_method ?? ''];
+    const charge = call.book.charges[intent.latest_charge ?? ''];
+    if (intent.status !== 'processing' || !method || !charge) throw unexpectedState(intent, 'complete');
+    const debit = Object.values(DEBIT_TOKENS).find((one) => one.lastFour === method.us_bank_account?.last4);
+    const refusal = debit?.refusal ?? null;
+    Object.assign(charge, {
+      status: refusal ? 'failed' : 'succeeded',
+      paid: !refusal,
+      captured: !refusal,
+      amount_captured: refusal ? 0 : charge.amount,
+      failure_code: refusal?.code ?? null,
+      failure_message: refusal?.message ?? null,
+    });
+    this.conclude(call, intent, charge, method, refusal);
+    return intent;
   }
 
   private answerChallenge(call: Call) {
@@ -240,8 +276,7 @@ export class Api {
     const method = call.book.paymentMethods[intent.payment_method ?? ''];
     if (!method) throw missing('payment_method', intent.payment_method ?? '');
     if (textAt(call.form, 'outcome') === 'complete') {
-      const card: Card = { number: '', brand: 'visa', outcome: { kind: 'pays' } };
-      this.charge(call, intent, card, method);
+      this.charge(call, intent, method, null);
       return intent;
     }
     const code = 'payment_intent_authentication_failure';
@@ -257,17 +292,22 @@ export class Api {
     return intent;
   }
 
-  /** Charges the card. Throws a 402 with the card's refusal when it declines. */
-  private charge(call: Call, intent: PaymentIntent, card: Card, method: PaymentMethod): void {
-    const refusal = card.outcome.kind === 'declines' ? card.outcome : null;
-    const { brand, last4, exp_month, exp_year } = method.card;
+  private newCharge(
+    call: Call,
+    intent: PaymentIntent,
+    method: PaymentMethod,
+    status: Charge['status'],
+    refusal: Refusal | null = null,
+  ): Charge {
+    const { card, us_bank_account } = method;
+    const captured = status === 'succeeded';
     const charge: Charge = {
       id: newId('ch'),
       object: 'charge',
       amount: intent.amount,
-      amount_captured: refusal ? 0 : intent.amount,
+      amount_captured: captured ? intent.amount : 0,
       amount_refunded: 0,
-      captured: !refusal,
+      captured,
       created: nowUnix(),
       currency: intent.currency,
       customer: intent.customer,
@@ -277,16 +317,52 @@ export class Api {
       failure_message: refusal?.message ?? null,
       livemode: false,
       metadata: { ...intent.metadata },
-      paid: !refusal,
+      paid: status !== 'failed',
       payment_intent: intent.id,
       payment_method: method.id,
-      payment_method_details: { type: 'card', card: { brand, last4, exp_month, exp_year } },
+      payment_method_details: {
+        type: method.type,
+        ...(card
+          ? {
+              card: {
+                brand: card.brand,
+                last4: card.last4,
+                exp_month: card.exp_month,
+                exp_year: card.exp_year,
+              },
+            }
+          : {}),
+        ...(us_bank_account ? { us_bank_account } : {}),
+      },
       receipt_email: intent.receipt_email,
       refunded: false,
-      status: refusal ? 'failed' : 'succeeded',
+      status,
     };
     call.book.charges[charge.id] = charge;
     intent.latest_charge = charge.id;
+    return charge;
+  }
+
+  /** Charges the card. Throws a 402 with the card's refusal when it declines. */
+  private charge(call: Call, intent: PaymentIntent, method: PaymentMethod, refusal: Refusal | null): void {
+    const charge = this.newCharge(call, intent, method, refusal ? 'failed' : 'succeeded', refusal);
+    this.conclude(call, intent, charge, method, refusal);
+    if (refusal && intent.last_payment_error) {
+      throw new ApiFault(402, {
+        ...intent.last_payment_error,
+        type: 'card_error',
+        payment_intent: structuredClone(intent),
+      });
+    }
+  }
+
+  private conclude(
+    call: Call,
+    intent: PaymentIntent,
+    charge: Charge,
+    method: PaymentMethod,
+    refusal: Refusal | null,
+  ): void {
     intent.next_action = null;
     if (!refusal) {
       Object.assign(intent, {
@@ -299,22 +375,20 @@ export class Api {
       this.tell(call, 'payment_intent.succeeded', intent);
       return;
     }
-    const error = {
-      type: 'card_error' as const,
-      code: refusal.code,
-      ...(refusal.declineCode ? { decline_code: refusal.declineCode } : {}),
-      message: refusal.message,
-      charge: charge.id,
-      payment_method: method,
-    };
     Object.assign(intent, {
       status: 'requires_payment_method',
       payment_method: null,
-      last_payment_error: error,
+      last_payment_error: {
+        type: 'card_error',
+        code: refusal.code,
+        ...(refusal.declineCode ? { decline_code: refusal.declineCode } : {}),
+        message: refusal.message,
+        charge: charge.id,
+        payment_method: method,
+      },
     });
     this.tell(call, 'payment_intent.payment_failed', intent);
     this.tell(call, 'charge.failed', charge);
-    throw new ApiFault(402, { ...error, payment_intent: structuredClone(intent) });
   }
 
   private cancelIntent(call: Call) {
@@ -372,6 +446,18 @@ export class Api {
     charge.refunded = charge.amount_refunded === charge.amount_captured;
     this.tell(call, 'refund.created', refund);
     this.tell(call, 'charge.refunded', charge);
+    return refund;
+  }
+
+  /** A bank sends a refund back: the money stays with the contractor. */
+  private failRefund(call: Call): Refund {
+    const refund = found(call.book.refunds, call.id, 'refund');
+    const charge = found(call.book.charges, refund.charge, 'charge');
+    if (refund.status === 'failed') throw invalid('The refund has failed already.');
+    refund.status = 'failed';
+    charge.amount_refunded -= refund.amount;
+    charge.refunded = false;
+    this.tell(call, 'refund.failed', refund);
     return refund;
   }
 
@@ -435,8 +521,8 @@ function listRefunds({ book, form }: Call) {
   return page(own, form, '/v1/refunds');
 }
 
-/** The card that a confirmation names: by token from a server, by number from the card form. */
-function methodOf({ form, publicly, book }: Call): { card: Card; method: PaymentMethod } {
+/** What a confirmation names: by token from a server, by a card's number from the card form. */
+function methodOf({ form, publicly, book }: Call): { outcome: Outcome; method: PaymentMethod } {
   const token = textAt(form, 'payment_method');
   const typed = textAt(form, 'payment_method_data', 'card', 'number');
   if (!publicly && typed) {
@@ -447,6 +533,25 @@ function methodOf({ form, publicly, book }: Call): { card: Card; method: Payment
       param: 'payment_method',
       code: 'parameter_missing',
     });
+  }
+  const billing_details = {
+    name: textAt(form, 'payment_method_data', 'billing_details', 'name') ?? null,
+    email: textAt(form, 'payment_method_data', 'billing_details', 'email') ?? null,
+  };
+  const base = {
+    id: newId('pm'),
+    object: 'payment_method' as const,
+    created: nowUnix(),
+    livemode: false as const,
+    billing_details,
+  };
+  const debit = DEBIT_TOKENS[token ?? ''];
+  if (debit) {
+    const us_bank_account = { bank_name: 'TEST BANK', last4: debit.lastFour };
+    return {
+      outcome: { kind: 'debits', ...debit },
+      method: { ...base, type: 'us_bank_account', us_bank_account },
+    };
   }
   const number = typed ?? METHOD_TOKENS[token ?? ''];
   if (number === undefined && token) found(book.paymentMethods, token, 'PaymentMethod', 'payment_method');
@@ -461,15 +566,8 @@ function methodOf({ form, publicly, book }: Call): { card: Card; method: Payment
   }
   const at = (key: string) => textAt(form, 'payment_method_data', 'card', key);
   const method: PaymentMethod = {
-    id: newId('pm'),
-    object: 'payment_method',
+    ...base,
     type: 'card',
-    created: nowUnix(),
-    livemode: false,
-    billing_details: {
-      name: textAt(form, 'payment_method_data', 'billing_details', 'name') ?? null,
-      email: textAt(form, 'payment_method_data', 'billing_details', 'email') ?? null,
-    },
     card: {
       brand: card.brand,
       last4: card.number.slice(-4),
@@ -479,5 +577,5 @@ function methodOf({ form, publicly, book }: Call): { card: Card; method: Payment
       funding: 'credit',
     },
   };
-  return { card, method };
+  return { outcome: card.outcome, method };
 }

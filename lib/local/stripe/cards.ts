@@ -15,8 +15,14 @@ export interface Card {
   readonly outcome: CardOutcome;
 }
 
-const declines = (code: string, message: string, declineCode?: string): CardOutcome => ({
-  kind: 'declines',
+/** A bank debit is on its way for days; how it ends is decided when a test lets it arrive. */
+export interface Debit {
+  readonly lastFour: string;
+  readonly refusal: Extract<CardOutcome, { kind: 'declines' }> | null;
+}
+
+const declines = (code: string, message: string, declineCode?: string) => ({
+  kind: 'declines' as const,
   code,
   declineCode,
   message,
@@ -60,6 +66,18 @@ export const METHOD_TOKENS: Readonly<Record<string, string>> = {
   pm_card_chargeDeclinedExpiredCard: '4000000000000069',
   pm_card_chargeDeclinedIncorrectCvc: '4000000000000127',
   pm_card_authenticationRequired: '4000002760003184',
+};
+
+/** Source of the names: the payment service's list of test bank accounts. */
+export const DEBIT_TOKENS: Readonly<Record<string, Debit>> = {
+  pm_usBankAccount_success: { lastFour: '6789', refusal: null },
+  pm_usBankAccount_insufficientFunds: {
+    lastFour: '2227',
+    refusal: declines(
+      'insufficient_funds',
+      'The customer’s account has insufficient funds to cover this payment.',
+    ),
+  },
 };
 
 export const findCard = (number: string): Card | undefined =>

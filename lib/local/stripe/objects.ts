@@ -34,21 +34,26 @@ export const accountShape = z.object({
 });
 export type Account = z.infer<typeof accountShape>;
 
+const bankAccountShape = z.object({ bank_name: z.string(), last4: z.string() });
+
 export const paymentMethodShape = z.object({
   id: z.string(),
   object: z.literal('payment_method'),
-  type: z.literal('card'),
+  type: z.enum(['card', 'us_bank_account']),
   created: unix,
   livemode: z.literal(false),
   billing_details: z.object({ name: z.string().nullable(), email: z.string().nullable() }),
-  card: z.object({
-    brand: z.string(),
-    last4: z.string(),
-    exp_month: z.number(),
-    exp_year: z.number(),
-    country: z.string(),
-    funding: z.string(),
-  }),
+  card: z
+    .object({
+      brand: z.string(),
+      last4: z.string(),
+      exp_month: z.number(),
+      exp_year: z.number(),
+      country: z.string(),
+      funding: z.string(),
+    })
+    .optional(),
+  us_bank_account: bankAccountShape.optional(),
 });
 export type PaymentMethod = z.infer<typeof paymentMethodShape>;
 
@@ -120,8 +125,11 @@ export const chargeShape = z.object({
   payment_intent: z.string(),
   payment_method: z.string(),
   payment_method_details: z.object({
-    type: z.literal('card'),
-    card: z.object({ brand: z.string(), last4: z.string(), exp_month: z.number(), exp_year: z.number() }),
+    type: z.enum(['card', 'us_bank_account']),
+    card: z
+      .object({ brand: z.string(), last4: z.string(), exp_month: z.number(), exp_year: z.number() })
+      .optional(),
+    us_bank_account: bankAccountShape.optional(),
   }),
   receipt_email: z.string().nullable(),
   refunded: z.boolean(),

@@ -75,7 +75,8 @@ function sendJson(
  * `POST /_fake/deliveries/hold {account?, metadata?}`, `GET /_fake/deliveries/held`,
  * `POST /_fake/deliveries/release {order}`, `POST /_fake/requests/hold {path}`,
  * `GET /_fake/requests/hanging?count=`, `POST /_fake/requests/release`,
- * `POST /_fake/requests/drop-answer {path, times}`, `GET /_fake/cards`.
+ * `POST /_fake/requests/drop-answer {path, times}`, `GET /_fake/cards`; and, with key and account as for the
+ * service itself, `POST /_fake/payment_intents/ID/arrive` (a bank debit ends), `POST /_fake/refunds/ID/fail`.
  */
 export async function startStripeFake(options: StripeFakeOptions): Promise<StripeFake> {
   const store = new Store(options.stateFile);
@@ -214,7 +215,8 @@ export async function startStripeFake(options: StripeFakeOptions): Promise<Strip
       if (file) {
         response.writeHead(200, { ...file.headers });
         response.end(file.body);
-      } else if (url.pathname.startsWith('/_fake/')) await answerHook(request, response, url);
+      } else if (url.pathname.startsWith('/_fake/') && !request.headers.authorization)
+        await answerHook(request, response, url);
       else await answerApi(request, response, url);
     } catch (error) {
       if (error instanceof ApiFault) return sendJson(response, error.status, { error: error.body });

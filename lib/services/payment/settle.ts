@@ -10,12 +10,6 @@ import { readSchedule } from '../draw/schedule';
 
 type Payment = typeof payments.$inferSelect;
 
-const brandName = (brand: string) =>
-  brand
-    .split(/[\s_]+/)
-    .map((word) => word.slice(0, 1).toUpperCase() + word.slice(1))
-    .join(' ');
-
 /**
  * Brings payment, ledger and draw to what the payment service holds. It only ever adds what is missing, so any
  * number of calls in any order end the same; the caller holds the draw's lock and read `intent` under it.
@@ -53,7 +47,7 @@ export async function settlePayment(
 
   const { charge } = intent;
   if (charge && intent.receivedCents > 0) {
-    const by = charge.card ? `, ${brandName(charge.card.brand)} ending in ${charge.card.lastFour}` : '';
+    const by = charge.by ? `, ${charge.by.name} ending in ${charge.by.lastFour}` : '';
     const posted = await post({
       kind: 'payment',
       amountCents: -intent.receivedCents,

@@ -96,7 +96,7 @@ describe('payment intents', () => {
       status: 'succeeded',
       receivedCents: 312_000,
       decline: null,
-      charge: { refundedCents: 0, card: { brand: 'visa', lastFour: '4242' } },
+      charge: { refundedCents: 0, by: { name: 'Visa', lastFour: '4242' } },
     });
   });
 
