@@ -1,18 +1,6 @@
-import type { Balance, DrawView } from '@/lib/contracts/payment';
+import { drawName, inDollars, inFull, type Balance, type DrawView } from '@/lib/contracts/payment';
 
-const DOLLARS = new Intl.NumberFormat('en-US', { style: 'currency', currency: 'USD' });
-
-/** A sum in full, such as "$3,120.00". */
-export const inDollars = (cents: number): string => DOLLARS.format(cents / 100);
-
-/** A calendar date in full, such as "Tuesday, December 1, 2026". */
-export const inFull = (calendarDate: string): string =>
-  new Intl.DateTimeFormat('en-US', { dateStyle: 'full', timeZone: 'UTC' }).format(
-    new Date(`${calendarDate}T12:00:00Z`),
-  );
-
-export const drawName = ({ number, of }: Pick<DrawView, 'number' | 'of'>): string =>
-  `Payment ${number} of ${of}`;
+export { drawName, inDollars, inFull };
 
 const WHEN: Readonly<Record<DrawView['due'], string>> = {
   signing: 'when the agreement is signed',

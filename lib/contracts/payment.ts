@@ -136,3 +136,21 @@ export function declineSentence(code: string, declineCode: string | null): strin
     'The bank did not accept the card and gave no reason. Your bank can tell you more, or use another card.'
   );
 }
+
+const DOLLARS = new Intl.NumberFormat('en-US', { style: 'currency', currency: 'USD' });
+
+/** A sum in full, such as "$3,120.00". */
+export const inDollars = (cents: number): string => DOLLARS.format(cents / 100);
+
+/** A calendar date (`YYYY-MM-DD`) in full, such as "Tuesday, December 1, 2026". */
+export const inFull = (date: string): string =>
+  new Intl.DateTimeFormat('en-US', { dateStyle: 'full', timeZone: 'UTC' }).format(
+    new Date(`${date}T12:00:00Z`),
+  );
+
+/** What a homeowner reads for a draw. */
+export const drawName = ({ number, of }: Pick<DrawView, 'number' | 'of'>): string =>
+  `Payment ${number} of ${of}`;
+
+/** What the worker is told of a payment that was posted. */
+export const receiptJobShape = z.object({ companyId: z.uuid(), ledgerId: z.uuid() });

@@ -22,6 +22,7 @@ export const RIGHTS = {
   'changeOrder.decide': ['owner'],
   'draw.read': ['owner', 'salesperson', 'homeowner'],
   'draw.pay': ['homeowner'],
+  'payment.refund': ['owner'],
   'doorOrder.read': ['owner', 'salesperson'],
   'approval.list': ['owner'],
   'cost.read': ['owner'],

@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import fc from 'fast-check';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { and, eq } from 'drizzle-orm';
@@ -11,6 +12,7 @@ import { cloneTestDatabase, type TestDatabase } from '@/lib/local/test-database'
 import { listDraws } from '@/lib/services/draw/list';
 import { readBalance } from '@/lib/services/ledger/balance';
 import { readPayment } from '@/lib/services/payment/read';
+import { refundPayment } from '@/lib/services/payment/refund';
 import { startPayment } from '@/lib/services/payment/start';
 import {
   addContractor,
@@ -321,6 +323,29 @@ describe('when the service cannot be asked', () => {
 });
 
 describe('refunds', () => {
+  it('only the owner gives back, never more than is left, and a second click gives nothing', async () => {
+    const household = await addHousehold(tern);
+    const ask = (actor: Actor, amountCents: number, requestId: string) =>
+      refundPayment(actor, { ...first(household), amountCents, reason: 'Pull was scratched', requestId });
+    const [one, two] = [randomUUID(), randomUUID()];
+    expect(codeOf(await ask(tern.owner, 1_000, one))).toBe('conflict');
+    const intentId = await begin(household);
+    await service.pay(tern.account, intentId);
+    await deliverAll(intentId);
+    expect(codeOf(await ask(household.guests[0], 1_000, one))).toBe('notAllowed');
+    expect(codeOf(await ask(quill.owner, 1_000, one))).toBe('notFound');
+    expect(codeOf(await ask(tern.owner, 312_001, two))).toBe('conflict');
+    const refund = valueOf(await ask(tern.owner, 1_000, one));
+    expect(valueOf(await ask(tern.owner, 1_000, one))).toEqual(refund);
+    await deliverAll(intentId);
+    const held = await readHeld(tern, household);
+    expect(held.ledger.at(-1)).toMatchObject({
+      kind: 'refund',
+      amountCents: 1_000,
+      externalId: refund.refundId,
+    });
+  });
+
   it('a refund that the bank sends back is taken back in the ledger', async () => {
     const household = await addHousehold(tern);
     const intentId = await begin(household);

@@ -3,7 +3,7 @@ import type { Transaction } from '@/db/client';
 import { draws, ledger, payments } from '@/db/schema';
 import { enqueue } from '@/lib/adapters/queue';
 import type { Worker } from '@/lib/contracts/actor';
-import type { IntentSnapshot, RefundSnapshot } from '@/lib/contracts/payment';
+import { drawName, type IntentSnapshot, type RefundSnapshot } from '@/lib/contracts/payment';
 import { canMove, DRAW_NEXT, type DrawState } from '@/lib/contracts/states';
 import { writeAudit } from '../audit/write';
 import { readSchedule } from '../draw/schedule';
@@ -24,7 +24,7 @@ export async function settlePayment(
   const schedule = await readSchedule(tx, worker.companyId, payment.jobId);
   const draw = schedule?.draws.find((one) => one.id === payment.drawId);
   if (!draw) throw new Error(`Payment ${payment.id} has no draw.`);
-  const name = `Payment ${draw.number} of ${draw.of}`;
+  const name = drawName(draw);
   const entry = { companyId: worker.companyId, jobId: payment.jobId, drawId: payment.drawId };
 
   const post = async (
@@ -61,10 +61,10 @@ export async function settlePayment(
     const failed = refund.status === 'failed' || refund.status === 'canceled';
     const given = { externalId: refund.id, at: refund.at };
     if (!failed) {
-      const memo = `Refund of payment ${draw.number} of ${draw.of}`;
+      const memo = `Refund of ${name.toLowerCase()}`;
       await post({ ...given, kind: 'refund', amountCents: refund.amountCents, memo });
     } else if (await hasEntry(tx, worker.companyId, 'refund', refund.id)) {
-      const memo = `Refund of payment ${draw.number} of ${draw.of} did not go through`;
+      const memo = `Refund of ${name.toLowerCase()} did not go through`;
       await post({ ...given, kind: 'reversal', amountCents: -refund.amountCents, memo });
     }
   }

@@ -1,0 +1,35 @@
+import { drawName, inDollars, inFull, type Balance, type DrawView } from '@/lib/contracts/payment';
+
+interface ReceiptFacts {
+  readonly contractor: { readonly name: string; readonly phone: string };
+  readonly jobName: string;
+  readonly draw: DrawView;
+  /** What was received, in cents. */
+  readonly receivedCents: number;
+  /** Calendar date in the company's time zone. */
+  readonly receivedOn: string;
+  readonly memo: string;
+  readonly balance: Balance;
+  /** Full address of the receipt's page. */
+  readonly link: string;
+}
+
+/** The words of a receipt. */
+export function composeReceipt(facts: ReceiptFacts): { subject: string; text: string } {
+  const { contractor, jobName, draw, receivedCents, receivedOn, memo, balance, link } = facts;
+  const { balanceCents } = balance;
+  const rest =
+    balanceCents > 0
+      ? `After this payment, ${inDollars(balanceCents)} of the agreed sum is still to be paid. Nothing more is due until we tell you.`
+      : 'With this payment, everything that was agreed is paid.';
+  return {
+    subject: `${drawName(draw)} received`,
+    text: [
+      `We have received ${drawName(draw).toLowerCase()} (${draw.label.toLowerCase()}) for ${jobName}.`,
+      `Sum: ${inDollars(receivedCents)}\nReceived: ${inFull(receivedOn)}\nFor: ${memo}`,
+      rest,
+      `The receipt and all payments:\n${link}`,
+      `Questions? Call ${contractor.name} at ${contractor.phone}.`,
+    ].join('\n\n'),
+  };
+}
