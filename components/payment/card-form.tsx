@@ -3,10 +3,11 @@
 import { Elements, PaymentElement, useElements, useStripe } from '@stripe/react-stripe-js';
 import type { Appearance, Stripe, StripeError } from '@stripe/stripe-js';
 import { useEffect, useMemo, useState, type FormEvent } from 'react';
+import { Button } from '@/components/ui/button';
 import { declineSentence, type PaymentStart } from '@/lib/contracts/payment';
 import { readAppearance } from './appearance';
 import { loadPaymentScript } from './load-stripe';
-import { inDollars } from './words';
+import { formatCents } from './words';
 
 /** What came of one press on "Pay". */
 export type Outcome =
@@ -98,11 +99,18 @@ function Inner({ start, returnPath, busy, onSend, onOutcome, onCannotLoad }: Pro
   }
 
   return (
-    <form onSubmit={(event) => void pay(event)} aria-busy={busy}>
+    <form onSubmit={(event) => void pay(event)} aria-busy={busy} className="grid gap-5">
       <PaymentElement onReady={() => setReady(true)} onLoadError={onCannotLoad} />
-      <button type="submit" disabled={!ready || busy}>
-        {busy ? 'Asking the bank' : `Pay ${inDollars(start.draw.amountCents)}`}
-      </button>
+      <div>
+        <Button type="submit" disabled={!ready || busy}>
+          {busy ? 'Asking the bank' : `Pay ${formatCents(start.draw.amountCents)}`}
+        </Button>
+      </div>
+      <p role="status" className="text-note text-quiet">
+        {busy
+          ? 'Please keep this page open. If your bank has a question, it appears here.'
+          : 'The card number goes to the payment service alone. It is never seen or kept here.'}
+      </p>
     </form>
   );
 }

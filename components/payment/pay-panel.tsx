@@ -17,10 +17,6 @@ import { useDraw } from './use-draw';
 // Only this page fetches the payment service's libraries, and only once there is something to pay.
 const CardForm = lazy(() => import('./card-form'));
 
-const POLL_WAITING_MS = 1500;
-/** Somebody else of the household may pay meanwhile. */
-const POLL_OPEN_MS = 15_000;
-
 interface Props {
   /** The contractor's slug. */
   readonly company: string;
@@ -38,8 +34,7 @@ export function PayPanel({ company, jobId, contractor, initial }: Props) {
   const address = paths.api.drawPayment(company, jobId, drawId);
   const [phase, setPhase] = useState<Phase>(() => phaseAfterLook(initial, null));
   const [notice] = useState(() => leftover(initial));
-  const waits = phase.kind === 'waiting' || initial.draw.state === 'processing';
-  const draw = useDraw(company, jobId, initial.draw, waits ? POLL_WAITING_MS : POLL_OPEN_MS);
+  const draw = useDraw(company, jobId, initial.draw, phase.kind === 'waiting');
 
   const look = useCallback(
     async (start: PaymentStart | null) => {

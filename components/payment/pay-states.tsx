@@ -3,7 +3,7 @@ import type { DrawView } from '@/lib/contracts/payment';
 import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
 import { Panel } from '@/components/ui/panel';
-import { inDollars, inFull, refundSentence, stateSentence } from './words';
+import { formatCents, inFull, refundSentence, stateSentence } from './words';
 
 interface Contractor {
   readonly name: string;
@@ -14,8 +14,8 @@ interface Contractor {
 export function Amount({ draw, children }: { draw: DrawView; children?: ReactNode }) {
   return (
     <Panel>
-      <p className="text-ink-quiet">{draw.label}</p>
-      <p className="font-title text-[44px] leading-[48px] tabular-nums">{inDollars(draw.amountCents)}</p>
+      <p className="text-quiet">{draw.label}</p>
+      <p className="font-title text-tape tabular-nums">{formatCents(draw.amountCents)}</p>
       <p className="mt-1">{stateSentence(draw)}</p>
       {children}
     </Panel>
@@ -57,12 +57,12 @@ export function Paid({ draw }: { draw: DrawView }) {
   const refunded = refundSentence(draw);
   return (
     <Panel>
-      <p className="text-ink-quiet">{draw.label}</p>
-      <p className="font-title text-[44px] leading-[48px] tabular-nums">{inDollars(draw.receivedCents)}</p>
+      <p className="text-quiet">{draw.label}</p>
+      <p className="font-title text-tape tabular-nums">{formatCents(draw.receivedCents)}</p>
       <p role="status" className="mt-1">
         {draw.paidOn ? `Received on ${inFull(draw.paidOn)}.` : 'Received.'} A receipt was sent by mail.
       </p>
-      {draw.receipt && <p className="mt-3 text-ink-quiet">{draw.receipt}</p>}
+      {draw.receipt && <p className="mt-3 text-quiet">{draw.receipt}</p>}
       {refunded && <p className="mt-3">{refunded}</p>}
     </Panel>
   );
@@ -82,8 +82,8 @@ export function Waiting({
 }) {
   return (
     <Panel>
-      <p className="text-ink-quiet">{draw.label}</p>
-      <p className="font-title text-[44px] leading-[48px] tabular-nums">{inDollars(draw.amountCents)}</p>
+      <p className="text-quiet">{draw.label}</p>
+      <p className="font-title text-tape tabular-nums">{formatCents(draw.amountCents)}</p>
       <p role="status" className="mt-1">
         {draw.state === 'processing'
           ? 'The bank is still working on it. This can take some days; you will get a mail when it has arrived.'
@@ -91,7 +91,7 @@ export function Waiting({
       </p>
       <p className="mt-3">You need not pay again, and you can leave this page.</p>
       <div className="mt-5">
-        <Button kind="quiet" onClick={onLook} disabled={looking}>
+        <Button tone="quiet" onClick={onLook} disabled={looking}>
           {looking ? 'Looking' : 'Look again'}
         </Button>
       </div>

@@ -2,7 +2,7 @@ import Link from 'next/link';
 import type { ScheduleView } from '@/lib/contracts/payment';
 import { Panel } from '@/components/ui/panel';
 import { paths } from '@/lib/paths';
-import { balanceSentences, drawName, inDollars, refundSentence, stateSentence } from './words';
+import { balanceSentences, drawName, formatCents, refundSentence, stateSentence } from './words';
 
 /** The payments of a job in order, then what was agreed, paid and is still open, in sentences. */
 export function Schedule({
@@ -16,7 +16,7 @@ export function Schedule({
 }) {
   const { draws, balance } = schedule;
   return (
-    <div className="grid gap-reveal">
+    <div className="grid gap-frame">
       <Panel>
         <h2 className="sr-only">Sum to date</h2>
         {balanceSentences(balance).map((sentence) => (
@@ -30,17 +30,15 @@ export function Schedule({
           <p>The schedule of payments appears here once the agreement is signed.</p>
         </Panel>
       ) : (
-        <ol className="grid gap-reveal" aria-label="Payments">
+        <ol className="grid gap-frame" aria-label="Payments">
           {draws.map((draw) => (
             <li key={draw.id}>
               <Panel>
                 <div className="flex flex-wrap items-baseline justify-between gap-x-5">
-                  <h2 className="font-title text-[24px] leading-[30px]">{drawName(draw)}</h2>
-                  <p className="font-title text-[24px] leading-[30px] tabular-nums">
-                    {inDollars(draw.amountCents)}
-                  </p>
+                  <h2 className="font-title text-part">{drawName(draw)}</h2>
+                  <p className="font-title text-part tabular-nums">{formatCents(draw.amountCents)}</p>
                 </div>
-                <p className="text-ink-quiet">{draw.label}</p>
+                <p className="text-quiet">{draw.label}</p>
                 <p>{stateSentence(draw)}</p>
                 {refundSentence(draw) && <p>{refundSentence(draw)}</p>}
                 {draw.state !== 'planned' && (

@@ -3,8 +3,12 @@ import { scheduleViewShape, type DrawView } from '@/lib/contracts/payment';
 import { paths } from '@/lib/paths';
 import { ask } from './ask';
 
-/** A draw as the program holds it, looked at again every `everyMs` and whenever the page is looked at again. */
-export function useDraw(company: string, jobId: string, first: DrawView, everyMs: number): DrawView {
+const WAITING_MS = 1500;
+/** Somebody else of the household may pay meanwhile, or the bank may take days. */
+const OTHERWISE_MS = 15_000;
+
+/** A draw as the program holds it, looked at again and again; soon, while a webhook is `awaited`. */
+export function useDraw(company: string, jobId: string, first: DrawView, awaited: boolean): DrawView {
   const address = paths.api.draws(company, jobId);
   const { data } = useSWR(
     [address, first.id],
@@ -13,7 +17,12 @@ export function useDraw(company: string, jobId: string, first: DrawView, everyMs
       if (answer.kind !== 'value') throw new Error(answer.kind === 'lost' ? 'not reached' : answer.sentence);
       return answer.value.draws.find((draw) => draw.id === first.id) ?? first;
     },
-    { fallbackData: first, refreshInterval: everyMs, dedupingInterval: 500, errorRetryInterval: everyMs },
+    {
+      fallbackData: first,
+      refreshInterval: (draw) => (awaited && draw?.state === 'due' ? WAITING_MS : OTHERWISE_MS),
+      dedupingInterval: 500,
+      errorRetryInterval: WAITING_MS,
+    },
   );
   return data;
 }

@@ -1,6 +1,7 @@
-import { drawName, inDollars, inFull, type Balance, type DrawView } from '@/lib/contracts/payment';
+import { formatCents } from '@/lib/engine/money';
+import { drawName, inFull, type Balance, type DrawView } from '@/lib/contracts/payment';
 
-export { drawName, inDollars, inFull };
+export { drawName, formatCents, inFull };
 
 const WHEN: Readonly<Record<DrawView['due'], string>> = {
   signing: 'when the agreement is signed',
@@ -28,8 +29,8 @@ export function stateSentence(draw: DrawView): string {
 export function refundSentence({ refundedCents, receivedCents }: DrawView): string | null {
   if (refundedCents <= 0) return null;
   return refundedCents >= receivedCents
-    ? `All of it, ${inDollars(refundedCents)}, was given back.`
-    : `${inDollars(refundedCents)} of it was given back.`;
+    ? `All of it, ${formatCents(refundedCents)}, was given back.`
+    : `${formatCents(refundedCents)} of it was given back.`;
 }
 
 /** The sum to date: what was agreed, paid and is still open, in full sentences. */
@@ -39,13 +40,13 @@ export function balanceSentences(balance: Balance): string[] {
   if (agreedCents === 0) return ['Nothing is signed yet, so nothing is owed.'];
   const sentences = [
     changesCents === 0
-      ? `The agreed sum is ${inDollars(sumCents)}.`
-      : `The agreed sum is ${inDollars(sumCents)}: ${inDollars(agreedCents)} by the agreement and ${inDollars(Math.abs(changesCents))} ${changesCents > 0 ? 'more' : 'less'} by change orders.`,
-    paidCents === 0 ? 'Nothing has been paid so far.' : `${inDollars(paidCents)} has been paid so far.`,
+      ? `The agreed sum is ${formatCents(sumCents)}.`
+      : `The agreed sum is ${formatCents(sumCents)}: ${formatCents(agreedCents)} by the agreement and ${formatCents(Math.abs(changesCents))} ${changesCents > 0 ? 'more' : 'less'} by change orders.`,
+    paidCents === 0 ? 'Nothing has been paid so far.' : `${formatCents(paidCents)} has been paid so far.`,
   ];
-  if (refundedCents > 0) sentences.push(`${inDollars(refundedCents)} was given back.`);
-  if (balanceCents > 0) sentences.push(`${inDollars(balanceCents)} is still to be paid.`);
+  if (refundedCents > 0) sentences.push(`${formatCents(refundedCents)} was given back.`);
+  if (balanceCents > 0) sentences.push(`${formatCents(balanceCents)} is still to be paid.`);
   if (balanceCents === 0) sentences.push('Everything is paid.');
-  if (balanceCents < 0) sentences.push(`${inDollars(-balanceCents)} is to be given back to you.`);
+  if (balanceCents < 0) sentences.push(`${formatCents(-balanceCents)} is to be given back to you.`);
   return sentences;
 }

@@ -137,11 +137,6 @@ export function declineSentence(code: string, declineCode: string | null): strin
   );
 }
 
-const DOLLARS = new Intl.NumberFormat('en-US', { style: 'currency', currency: 'USD' });
-
-/** A sum in full, such as "$3,120.00". */
-export const inDollars = (cents: number): string => DOLLARS.format(cents / 100);
-
 /** A calendar date (`YYYY-MM-DD`) in full, such as "Tuesday, December 1, 2026". */
 export const inFull = (date: string): string =>
   new Intl.DateTimeFormat('en-US', { dateStyle: 'full', timeZone: 'UTC' }).format(

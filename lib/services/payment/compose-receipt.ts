@@ -1,4 +1,5 @@
-import { drawName, inDollars, inFull, type Balance, type DrawView } from '@/lib/contracts/payment';
+import { formatCents } from '@/lib/engine/money';
+import { drawName, inFull, type Balance, type DrawView } from '@/lib/contracts/payment';
 
 interface ReceiptFacts {
   readonly contractor: { readonly name: string; readonly phone: string };
@@ -20,13 +21,13 @@ export function composeReceipt(facts: ReceiptFacts): { subject: string; text: st
   const { balanceCents } = balance;
   const rest =
     balanceCents > 0
-      ? `After this payment, ${inDollars(balanceCents)} of the agreed sum is still to be paid. Nothing more is due until we tell you.`
+      ? `After this payment, ${formatCents(balanceCents)} of the agreed sum is still to be paid. Nothing more is due until we tell you.`
       : 'With this payment, everything that was agreed is paid.';
   return {
     subject: `${drawName(draw)} received`,
     text: [
       `We have received ${drawName(draw).toLowerCase()} (${draw.label.toLowerCase()}) for ${jobName}.`,
-      `Sum: ${inDollars(receivedCents)}\nReceived: ${inFull(receivedOn)}\nFor: ${memo}`,
+      `Sum: ${formatCents(receivedCents)}\nReceived: ${inFull(receivedOn)}\nFor: ${memo}`,
       rest,
       `The receipt and all payments:\n${link}`,
       `Questions? Call ${contractor.name} at ${contractor.phone}.`,

@@ -1,9 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { leftover, phaseAfterLook } from '@/components/payment/pay-phase';
-import { balanceSentences, refundSentence, stateSentence } from '@/components/payment/words';
+import { balanceSentences, formatCents, refundSentence, stateSentence } from '@/components/payment/words';
 import {
   declineSentence,
-  inDollars,
   inFull,
   type Balance,
   type DrawView,
@@ -36,7 +35,7 @@ const balance: Balance = {
 
 describe('sums and dates', () => {
   it('are told in full', () => {
-    expect(inDollars(312_050)).toBe('$3,120.50');
+    expect(formatCents(312_050)).toBe('$3,120.50');
     // Source: perpetual calendar; the first of December 2026 is a Tuesday.
     expect(inFull('2026-12-01')).toBe('Tuesday, December 1, 2026');
   });
