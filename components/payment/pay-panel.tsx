@@ -22,6 +22,8 @@ interface Props {
   readonly company: string;
   readonly jobId: string;
   readonly contractor: { readonly name: string; readonly phone: string };
+  /** Why this visitor may not pay, or null. */
+  readonly reasonNot: string | null;
   readonly initial: PaymentView;
 }
 
@@ -29,7 +31,7 @@ interface Props {
  * Pays one draw. What is shown as paid is what the webhook has posted; this browser only waits for it, and looks
  * the truth up whenever it lost sight of its payment.
  */
-export function PayPanel({ company, jobId, contractor, initial }: Props) {
+export function PayPanel({ company, jobId, contractor, reasonNot, initial }: Props) {
   const drawId = initial.draw.id;
   const address = paths.api.drawPayment(company, jobId, drawId);
   const [phase, setPhase] = useState<Phase>(() => phaseAfterLook(initial, null));
@@ -45,7 +47,7 @@ export function PayPanel({ company, jobId, contractor, initial }: Props) {
     [address],
   );
 
-  const starting = phase.kind === 'starting' && draw.state === 'due';
+  const starting = phase.kind === 'starting' && draw.state === 'due' && reasonNot === null;
   useEffect(() => {
     if (!starting) return;
     let gone = false;
@@ -94,6 +96,13 @@ export function PayPanel({ company, jobId, contractor, initial }: Props) {
         looking={phase.kind === 'looking'}
         onLook={() => void look(null)}
       />
+    );
+  }
+  if (reasonNot !== null) {
+    return (
+      <Amount draw={draw}>
+        <p className="mt-5">{reasonNot}</p>
+      </Amount>
     );
   }
   if (phase.kind === 'starting') return <Fetching draw={draw} />;

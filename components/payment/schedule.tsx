@@ -1,18 +1,26 @@
 import Link from 'next/link';
-import type { ScheduleView } from '@/lib/contracts/payment';
+import type { DrawView, ScheduleView } from '@/lib/contracts/payment';
 import { Panel } from '@/components/ui/panel';
 import { paths } from '@/lib/paths';
 import { balanceSentences, drawName, formatCents, refundSentence, stateSentence } from './words';
+
+function linkText(draw: DrawView, pays: boolean): string {
+  if (draw.state === 'paid') return 'See the receipt';
+  return draw.state === 'due' && pays ? `Pay ${drawName(draw).toLowerCase()}` : 'See how it stands';
+}
 
 /** The payments of a job in order, then what was agreed, paid and is still open, in sentences. */
 export function Schedule({
   schedule,
   company,
   jobId,
+  pays,
 }: {
   schedule: ScheduleView;
   company: string;
   jobId: string;
+  /** Whether the visitor is one who pays. */
+  pays: boolean;
 }) {
   const { draws, balance } = schedule;
   return (
@@ -42,9 +50,7 @@ export function Schedule({
                 <p>{stateSentence(draw)}</p>
                 {refundSentence(draw) && <p>{refundSentence(draw)}</p>}
                 {draw.state !== 'planned' && (
-                  <Link href={paths.payment(company, jobId, draw.id)}>
-                    {draw.state === 'due' ? `Pay ${drawName(draw).toLowerCase()}` : 'See the receipt'}
-                  </Link>
+                  <Link href={paths.payment(company, jobId, draw.id)}>{linkText(draw, pays)}</Link>
                 )}
               </Panel>
             </li>
