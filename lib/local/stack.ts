@@ -42,6 +42,8 @@ export interface RunningStack {
   readonly real: ReadonlySet<Service>;
   /** All that a test or a command run by hand needs to reach it. */
   readonly variables: Record<string, string>;
+  /** Who can sign in and how, a line each, as the seed says. */
+  readonly people: readonly string[];
 }
 
 /** Everything that runs on this machine for one address. */
@@ -100,7 +102,17 @@ export class Stack {
       'The database could not be migrated.',
     );
     await this.startFakes(settings, real);
-    await this.script('Demo', 'seed', 'db/seed/seed.ts', ownerEnvironment, 'The demo could not be put in.');
+    // Where everything is real, invented people have no business.
+    const seed =
+      options.surroundings.NODE_ENV === 'production'
+        ? []
+        : await this.script(
+            'Demo',
+            'seed',
+            'db/seed/seed.ts',
+            ownerEnvironment,
+            'The demo could not be put in.',
+          );
 
     const production = { ...environment, NODE_ENV: 'production' };
     const build = options.dev ? null : await step('Build', () => ensureBuild(keeper));
@@ -117,7 +129,7 @@ export class Stack {
       await untilAnswers(origins(settings).web, web);
       return origins(settings).web;
     });
-    return { settings, real, variables: reach };
+    return { settings, real, variables: reach, people: seed };
   }
 
   /** Whether there is anything to stop. */
@@ -152,18 +164,21 @@ export class Stack {
     return this.stopped;
   }
 
+  /** Runs one of the program's scripts. Its last line goes to the progress; the lines before it are answered. */
   private async script(
     title: string,
     name: string,
     file: string,
     env: Variables,
     sentence: string,
-  ): Promise<void> {
-    await step(title, async () => {
-      if (!existsSync(path.join(root, file))) return `${file} is not there`;
+  ): Promise<string[]> {
+    const { lines } = await step(title, async () => {
+      if (!existsSync(path.join(root, file))) return { note: `${file} is not there`, lines: [] };
       const output = await this.keeper.run(name, process.execPath, [...TSX, file], env, sentence);
-      return output.split('\n').at(-1) || 'done';
+      const written = output.split('\n').filter((line) => line.trim() !== '');
+      return { note: written.at(-1)?.trim() ?? 'done', lines: written.slice(0, -1) };
     });
+    return lines;
   }
 
   private async startFakes(settings: Settings, real: ReadonlySet<Service>): Promise<void> {

@@ -1,18 +1,16 @@
 import path from 'node:path';
-import { FROM_A_STACK, origins, plainSurroundings, type Service } from './environment';
+import { FROM_A_STACK, origins, plainSurroundings } from './environment';
 import { lockedBy, tryLock } from './holders';
 import { localFolder } from './places';
 import { printFault } from './progress';
-import { PREFERRED_PORTS, type Settings } from './settings';
-import { Stack } from './stack';
+import { PREFERRED_PORTS } from './settings';
+import { Stack, type RunningStack } from './stack';
 
-function printReady(
-  { settings, real }: { settings: Settings; real: ReadonlySet<Service> },
-  dev: boolean,
-): void {
+function printReady({ settings, real, people }: RunningStack, dev: boolean): void {
   const at = origins(settings);
   console.log(`\nStilewright ${dev ? '(development) ' : ''}is running.\n\n  Address   ${at.web}`);
   if (!real.has('mail')) console.log(`  Mailbox   ${at.mailbox}`);
+  if (people.length > 0) console.log(`\nWho can sign in\n${people.join('\n')}`);
   console.log('\nCtrl-C stops everything.');
 }
 
