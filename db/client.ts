@@ -4,43 +4,54 @@ import postgres from 'postgres';
 import type { Actor, Worker } from '@/lib/contracts/actor';
 import * as schema from './schema';
 
-export type Transaction = Parameters<Parameters<PostgresJsDatabase<typeof schema>['transaction']>[0]>[0];
+type Database = PostgresJsDatabase<typeof schema>;
+export type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0];
 
-/** Looks one row up by a key before anybody's scope is known. */
-export interface Lookup {
-  readonly kind: 'slug' | 'organization' | 'account' | 'user' | 'person' | 'invitation';
-  readonly key: string;
-  readonly companyId?: string;
-}
+/** Looks rows up by a key before anybody's scope is known; each kind shows what the key names and nothing else. */
+export type Lookup =
+  | { readonly kind: 'slug' | 'organization' | 'account'; readonly key: string; readonly companyId?: undefined }
+  /** A sign-in's rows, in all companies or in one. */
+  | { readonly kind: 'user'; readonly key: string; readonly companyId?: string }
+  /** What a person of a company belongs to. */
+  | { readonly kind: 'person'; readonly key: string; readonly companyId: string }
+  /** The invitation whose token has this hash. */
+  | { readonly kind: 'invitation'; readonly key: string; readonly companyId: string };
 
 export type Scope = Actor | Worker | Lookup;
 
-// One pool per process, also across the reloads of the development server.
-const holder = globalThis as { stilewrightPool?: { url: string; sql: postgres.Sql } };
+interface Pool {
+  readonly url: string;
+  readonly client: postgres.Sql;
+  readonly database: Database;
+}
 
-function pool(): postgres.Sql {
+// One pool per process, also across the reloads of the development server.
+const holder = globalThis as { stilewrightPool?: Pool };
+
+function pool(): Pool {
   const url = process.env.DATABASE_URL;
   if (!url) throw new Error('DATABASE_URL is not set.');
   if (holder.stilewrightPool?.url !== url) {
-    holder.stilewrightPool = { url, sql: postgres(url, { max: 10, onnotice: () => undefined }) };
+    const client = postgres(url, { max: 10, onnotice: () => undefined });
+    holder.stilewrightPool = { url, client, database: drizzle(client, { schema }) };
   }
-  return holder.stilewrightPool.sql;
+  return holder.stilewrightPool;
 }
 
 /** Ends this process's connections; for scripts and tests. */
 export async function closePool(): Promise<void> {
   const held = holder.stilewrightPool;
   delete holder.stilewrightPool;
-  await held?.sql.end({ timeout: 5 });
+  await held?.client.end({ timeout: 5 });
 }
 
 /**
  * The only way to a transaction. Row-level security sees the scope for as long as `work` runs; without one it
- * shows no rows. A thrown error rolls everything back.
+ * shows no rows. A thrown error rolls everything back. Inside `work`, call no other `withScope`: it would be
+ * another transaction on another connection.
  */
 export async function withScope<T>(scope: Scope, work: (tx: Transaction) => Promise<T>): Promise<T> {
-  const db = drizzle(pool(), { schema });
-  return db.transaction(async (tx) => {
+  return pool().database.transaction(async (tx) => {
     const company = scope.companyId ?? '';
     const job = scope.kind === 'guest' ? scope.jobId : '';
     const person = 'personId' in scope ? scope.personId : '';

@@ -5,6 +5,7 @@ import {
   jsonb,
   pgTable,
   primaryKey,
+  type PgTableExtraConfigValue,
   text,
   uniqueIndex,
   uuid,
@@ -12,7 +13,9 @@ import {
 import type { Choices } from '@/lib/engine/types';
 import { CHANGE_ORDER_STATES } from '@/lib/contracts/states';
 import { companyId, createdAt, instant, policies, rowId } from './columns';
-import { jobs } from './job';
+import { editions, jobs, surveys } from './job';
+import { people } from './person';
+import { schemes } from './scheme';
 
 export const PAGE_KINDS = ['agreement', 'changeOrder', 'cancellation', 'measureRevision'] as const;
 
@@ -42,9 +45,14 @@ export const changeOrders = pgTable(
     createdAt: createdAt(),
     updatedAt: instant('updated_at').notNull().defaultNow(),
   },
-  (t) => [
+  // Typed, because the two tables refer to each other.
+  (t): PgTableExtraConfigValue[] => [
     primaryKey({ columns: [t.companyId, t.id] }),
     foreignKey({ columns: [t.companyId, t.jobId], foreignColumns: [jobs.companyId, jobs.id] }),
+    foreignKey({ columns: [t.companyId, t.personId], foreignColumns: [people.companyId, people.id] }),
+    foreignKey({ columns: [t.companyId, t.editionId], foreignColumns: [editions.companyId, editions.id] }),
+    foreignKey({ columns: [t.companyId, t.surveyId], foreignColumns: [surveys.companyId, surveys.id] }),
+    foreignKey({ columns: [t.companyId, t.offerId], foreignColumns: [offers.companyId, offers.id] }),
     uniqueIndex('change_orders_number').on(t.companyId, t.jobId, t.number),
     index('change_orders_state').on(t.companyId, t.state),
     ...policies('change_orders', { guest: 'write' }),
@@ -73,6 +81,12 @@ export const offers = pgTable(
   (t) => [
     primaryKey({ columns: [t.companyId, t.id] }),
     foreignKey({ columns: [t.companyId, t.jobId], foreignColumns: [jobs.companyId, jobs.id] }),
+    foreignKey({ columns: [t.companyId, t.schemeId], foreignColumns: [schemes.companyId, schemes.id] }),
+    foreignKey({
+      columns: [t.companyId, t.changeOrderId],
+      foreignColumns: [changeOrders.companyId, changeOrders.id],
+    }),
+    foreignKey({ columns: [t.companyId, t.createdBy], foreignColumns: [people.companyId, people.id] }),
     index('offers_job').on(t.companyId, t.jobId, t.createdAt),
     ...policies('offers', { guest: 'write', appendOnly: true }),
   ],
@@ -101,6 +115,8 @@ export const signatures = pgTable(
   (t) => [
     primaryKey({ columns: [t.companyId, t.id] }),
     foreignKey({ columns: [t.companyId, t.offerId], foreignColumns: [offers.companyId, offers.id] }),
+    foreignKey({ columns: [t.companyId, t.jobId], foreignColumns: [jobs.companyId, jobs.id] }),
+    foreignKey({ columns: [t.companyId, t.personId], foreignColumns: [people.companyId, people.id] }),
     uniqueIndex('signatures_once').on(t.companyId, t.offerId, t.personId),
     ...policies('signatures', { guest: 'write', appendOnly: true }),
   ],

@@ -5,6 +5,7 @@ import {
   jsonb,
   pgTable,
   primaryKey,
+  type PgTableExtraConfigValue,
   text,
   uniqueIndex,
   uuid,
@@ -14,6 +15,7 @@ import type { Survey } from '@/lib/engine/types';
 import { JOB_STAGES } from '@/lib/contracts/states';
 import { companyId, createdAt, policies, rowId, scopeJob } from './columns';
 import { companies } from './company';
+import { people } from './person';
 
 /** One kitchen of one household. */
 export const jobs = pgTable(
@@ -33,8 +35,12 @@ export const jobs = pgTable(
     firstEstimateCents: integer('first_estimate_cents'),
     createdAt: createdAt(),
   },
-  (t) => [
+  // Typed, because the tables refer to each other.
+  (t): PgTableExtraConfigValue[] => [
     primaryKey({ columns: [t.companyId, t.id] }),
+    foreignKey({ columns: [t.companyId, t.salespersonId], foreignColumns: [people.companyId, people.id] }),
+    foreignKey({ columns: [t.companyId, t.surveyId], foreignColumns: [surveys.companyId, surveys.id] }),
+    foreignKey({ columns: [t.companyId, t.editionId], foreignColumns: [editions.companyId, editions.id] }),
     uniqueIndex('jobs_number').on(t.companyId, t.number),
     ...policies('jobs', { guest: 'read', guestRows: sql`id = ${scopeJob}` }),
   ],
@@ -56,6 +62,7 @@ export const surveys = pgTable(
   (t) => [
     primaryKey({ columns: [t.companyId, t.id] }),
     foreignKey({ columns: [t.companyId, t.jobId], foreignColumns: [jobs.companyId, jobs.id] }),
+    foreignKey({ columns: [t.companyId, t.createdBy], foreignColumns: [people.companyId, people.id] }),
     uniqueIndex('surveys_number').on(t.companyId, t.jobId, t.number),
     ...policies('surveys', { guest: 'read', appendOnly: true }),
   ],
@@ -75,6 +82,7 @@ export const editions = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.companyId, t.id] }),
+    foreignKey({ columns: [t.companyId, t.publishedBy], foreignColumns: [people.companyId, people.id] }),
     uniqueIndex('editions_number').on(t.companyId, t.number),
     ...policies('editions', { guest: 'read', guestRows: sql`true`, appendOnly: true }),
   ],

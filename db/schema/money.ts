@@ -11,6 +11,7 @@ import {
 import { DRAW_STATES } from '@/lib/contracts/states';
 import { companyId, createdAt, instant, policies, rowId } from './columns';
 import { jobs } from './job';
+import { people } from './person';
 
 /** One payment of the schedule. */
 export const draws = pgTable(
@@ -55,6 +56,8 @@ export const payments = pgTable(
   (t) => [
     primaryKey({ columns: [t.companyId, t.id] }),
     foreignKey({ columns: [t.companyId, t.drawId], foreignColumns: [draws.companyId, draws.id] }),
+    foreignKey({ columns: [t.companyId, t.jobId], foreignColumns: [jobs.companyId, jobs.id] }),
+    foreignKey({ columns: [t.companyId, t.createdBy], foreignColumns: [people.companyId, people.id] }),
     uniqueIndex('payments_intent').on(t.companyId, t.intentId),
     index('payments_draw').on(t.companyId, t.drawId),
     ...policies('payments', { guest: 'write' }),
@@ -81,6 +84,7 @@ export const ledger = pgTable(
   (t) => [
     primaryKey({ columns: [t.companyId, t.id] }),
     foreignKey({ columns: [t.companyId, t.jobId], foreignColumns: [jobs.companyId, jobs.id] }),
+    foreignKey({ columns: [t.companyId, t.drawId], foreignColumns: [draws.companyId, draws.id] }),
     uniqueIndex('ledger_external').on(t.companyId, t.kind, t.externalId),
     uniqueIndex('ledger_page').on(t.companyId, t.jobId, t.pageSequence),
     index('ledger_job').on(t.companyId, t.jobId),

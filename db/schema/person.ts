@@ -57,7 +57,8 @@ export const people = pgTable(
       for: 'update',
       to: appUser,
       using: sql`${scopeKind} = 'user' and clerk_user_id = ${scopeKey}`,
-      withCheck: sql`${scopeKind} = 'user'`,
+      // Only to take the sign-in away or to leave it.
+      withCheck: sql`${scopeKind} = 'user' and (clerk_user_id is null or clerk_user_id = ${scopeKey})`,
     }),
   ],
 );
@@ -131,6 +132,7 @@ export const invitations = pgTable(
   (t) => [
     primaryKey({ columns: [t.companyId, t.id] }),
     foreignKey({ columns: [t.companyId, t.jobId], foreignColumns: [jobs.companyId, jobs.id] }),
+    foreignKey({ columns: [t.companyId, t.invitedBy], foreignColumns: [people.companyId, people.id] }),
     uniqueIndex('invitations_token').on(t.tokenHash),
     index('invitations_job').on(t.companyId, t.jobId),
     ...policies('invitations', { guest: 'none' }),

@@ -1,6 +1,6 @@
 import { sql } from 'drizzle-orm';
 import { index, jsonb, pgPolicy, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core';
-import { appUser, companyId, createdAt, policies, rowId, scopeKind } from './columns';
+import { appUser, companyId, createdAt, policies, rowId, scopeCompany, scopeKind } from './columns';
 
 /** Who did what; one row per verb that changed something. */
 export const audit = pgTable(
@@ -24,6 +24,10 @@ export const audit = pgTable(
   ],
 );
 
+// A worker sees its company's events; an event of no company belongs to whoever looks its subject up.
+const eventScope = sql`${scopeKind} in ('worker', 'organization', 'account', 'user')
+  and (company_id is null or company_id = ${scopeCompany})`;
+
 /** Webhook events already taken, so that a second delivery changes nothing. */
 export const webhookEvents = pgTable(
   'webhook_events',
@@ -40,12 +44,12 @@ export const webhookEvents = pgTable(
     pgPolicy('webhook_events_select', {
       for: 'select',
       to: appUser,
-      using: sql`${scopeKind} in ('worker', 'organization', 'account', 'user')`,
+      using: eventScope,
     }),
     pgPolicy('webhook_events_insert', {
       for: 'insert',
       to: appUser,
-      withCheck: sql`${scopeKind} in ('worker', 'organization', 'account', 'user')`,
+      withCheck: eventScope,
     }),
   ],
 );

@@ -12,6 +12,7 @@ import {
 import type { ChoiceChange, Choices } from '@/lib/engine/types';
 import { companyId, createdAt, instant, policies, rowId } from './columns';
 import { jobs } from './job';
+import { people } from './person';
 
 /** One named set of choices for a job, A to F. */
 export const schemes = pgTable(
@@ -60,6 +61,8 @@ export const schemeHistory = pgTable(
   (t) => [
     primaryKey({ columns: [t.companyId, t.schemeId, t.version] }),
     foreignKey({ columns: [t.companyId, t.schemeId], foreignColumns: [schemes.companyId, schemes.id] }),
+    foreignKey({ columns: [t.companyId, t.jobId], foreignColumns: [jobs.companyId, jobs.id] }),
+    foreignKey({ columns: [t.companyId, t.personId], foreignColumns: [people.companyId, people.id] }),
     ...policies('scheme_history', { guest: 'write', appendOnly: true }),
   ],
 );

@@ -22,7 +22,7 @@ const withDatabase = (url: string, database: string) => {
 
 /** Name of the migrated database that the present migrations lead to; others of that kind are outdated. */
 const templateName = () =>
-  `template_${hashSources(root, ['db/migrate.ts', 'db/migrations', 'package-lock.json']).slice(0, 16)}`;
+  `template_${hashSources(root, ['db/migrate.ts', 'db/migrations', 'lib/contracts/jobs.ts', 'package-lock.json']).slice(0, 16)}`;
 
 /** Migrates the template once per state of the migrations; several processes may ask at once. */
 async function ensureTemplate(cluster: Cluster): Promise<string> {
