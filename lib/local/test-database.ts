@@ -10,7 +10,7 @@ import { localFolder, root } from './places';
 import { ensurePostgres, type Cluster } from './postgres';
 import { SetupFault } from './progress';
 import { loadSettings } from './settings';
-import { hashSources } from './staleness';
+import { hashFiles } from './staleness';
 
 const run = promisify(execFile);
 
@@ -22,7 +22,7 @@ const withDatabase = (url: string, database: string) => {
 
 /** Name of the migrated database that the present migrations lead to; others of that kind are outdated. */
 const templateName = () =>
-  `template_${hashSources(root, ['db/migrate.ts', 'db/migrations', 'lib/contracts/jobs.ts', 'package-lock.json']).slice(0, 16)}`;
+  `template_${hashFiles(root, ['db/migrate.ts', 'db/migrations', 'lib/contracts/jobs.ts', 'package-lock.json']).slice(0, 16)}`;
 
 /** Migrates the template once per state of the migrations; several processes may ask at once. */
 async function ensureTemplate(cluster: Cluster): Promise<string> {
@@ -41,20 +41,18 @@ async function ensureTemplate(cluster: Cluster): Promise<string> {
     if (databases.includes(template)) return template;
     const building = `building_${process.pid}_${randomBytes(3).toString('hex')}`;
     await cluster.createDatabase(building);
-    if (existsSync(path.join(root, 'db/migrate.ts'))) {
-      await run(process.execPath, ['--import', 'tsx', 'db/migrate.ts'], {
-        cwd: root,
-        env: {
-          ...plainSurroundings(process.env),
-          NODE_ENV: 'development',
-          DATABASE_URL: cluster.appUrl(building),
-          DATABASE_OWNER_URL: cluster.ownerUrl(building),
-        },
-      }).catch((error: unknown) => {
-        const output = error instanceof Error && 'stderr' in error ? String(error.stderr) : String(error);
-        throw new SetupFault('The test database could not be migrated.', output);
-      });
-    }
+    await run(process.execPath, ['--import', 'tsx', 'db/migrate.ts'], {
+      cwd: root,
+      env: {
+        ...plainSurroundings(process.env),
+        NODE_ENV: 'development',
+        DATABASE_URL: cluster.appUrl(building),
+        DATABASE_OWNER_URL: cluster.ownerUrl(building),
+      },
+    }).catch((error: unknown) => {
+      const output = error instanceof Error && 'stderr' in error ? String(error.stderr) : String(error);
+      throw new SetupFault('The test database could not be migrated.', output);
+    });
     await cluster.renameDatabase(building, template);
     return template;
   } finally {

@@ -2,7 +2,7 @@ import { mkdirSync, mkdtempSync, rmSync, utimesSync, writeFileSync } from 'node:
 import os from 'node:os';
 import path from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
-import { hashSources } from '@/lib/local/staleness';
+import { hashFiles, hashSources } from '@/lib/local/staleness';
 
 let folder = '';
 
@@ -61,5 +61,14 @@ describe('a build is not stale', () => {
     write('lib/local/stack.ts', 'four');
     write('tests/unit/some.test.ts', 'five');
     expect(hashSources(folder)).toBe(before);
+  });
+});
+
+describe('the state of the migrations', () => {
+  it('differs when a migration changed', () => {
+    write('db/migrations/0000_tables.sql', 'create table one ()');
+    const before = hashFiles(folder, ['db/migrations']);
+    write('db/migrations/0000_tables.sql', 'create table two ()');
+    expect(hashFiles(folder, ['db/migrations'])).not.toBe(before);
   });
 });
