@@ -9,7 +9,7 @@ interface Schedule {
 }
 
 /** The calendar date of an instant where the company is. */
-const calendarDate = (instant: Date, timeZone: string): string =>
+export const calendarDate = (instant: Date, timeZone: string): string =>
   // The Swedish form of a date is the one of ISO 8601.
   new Intl.DateTimeFormat('sv-SE', { timeZone, dateStyle: 'short' }).format(instant);
 

@@ -11,13 +11,11 @@ interface ReceiptFacts {
   readonly receivedOn: string;
   readonly memo: string;
   readonly balance: Balance;
-  /** Full address of the receipt's page. */
-  readonly link: string;
 }
 
-/** The words of a receipt. */
+/** The words of a receipt, paragraphs parted by an empty line. */
 export function composeReceipt(facts: ReceiptFacts): { subject: string; text: string } {
-  const { contractor, jobName, draw, receivedCents, receivedOn, memo, balance, link } = facts;
+  const { contractor, jobName, draw, receivedCents, receivedOn, memo, balance } = facts;
   const { balanceCents } = balance;
   const rest =
     balanceCents > 0
@@ -29,7 +27,6 @@ export function composeReceipt(facts: ReceiptFacts): { subject: string; text: st
       `We have received ${drawName(draw).toLowerCase()} (${draw.label.toLowerCase()}) for ${jobName}.`,
       `Sum: ${formatCents(receivedCents)}\nReceived: ${inFull(receivedOn)}\nFor: ${memo}`,
       rest,
-      `The receipt and all payments:\n${link}`,
       `Questions? Call ${contractor.name} at ${contractor.phone}.`,
     ].join('\n\n'),
   };

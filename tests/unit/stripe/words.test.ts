@@ -131,19 +131,12 @@ describe('the receipt', () => {
       receivedOn: '2026-12-01',
       memo: 'Payment 1 of 4, Visa ending in 4242',
       balance: { ...balance, ...rest },
-      link: 'http://localhost:4300/tern-hollow/jobs/1/payments/2',
     });
 
   it('names the payment, the sum, the day, the card and what is still open', () => {
     const { subject, text } = words({ paidCents: 312_000, balanceCents: 728_000 });
     expect(subject).toBe('Payment 1 of 4 received');
-    for (const part of [
-      '$3,120.00',
-      'Tuesday, December 1, 2026',
-      'ending in 4242',
-      '$7,280.00',
-      '/payments/2',
-    ]) {
+    for (const part of ['$3,120.00', 'Tuesday, December 1, 2026', 'ending in 4242', '$7,280.00']) {
       expect(text).toContain(part);
     }
   });
