@@ -9,7 +9,7 @@ import { IdempotencyKeys } from './idempotency';
 import { API_VERSION, newId } from './objects';
 import { browserFiles } from './pages';
 import { Store } from './store';
-import { Deliveries } from './webhooks';
+import { carries, Deliveries } from './webhooks';
 
 export interface StripeFakeOptions {
   /** 0 takes any free port. */
@@ -32,11 +32,11 @@ export interface StripeFake {
 
 const BODY_MAX_BYTES = 1_000_000;
 
-const releaseShape = z.object({ order: z.enum(['forward', 'reverse']).default('forward') });
 const holdShape = z.object({
   account: z.string().optional(),
   metadata: z.record(z.string(), z.string()).optional(),
 });
+const releaseShape = holdShape.extend({ order: z.enum(['forward', 'reverse']).default('forward') });
 const pathShape = z.object({ path: z.string().startsWith('/') });
 const dropShape = pathShape.extend({ times: z.number().int().min(1).max(20).default(1) });
 
@@ -71,9 +71,9 @@ function sendJson(
  * Stands in for the payment service on one machine: REST interface, browser script, card form, webhooks.
  *
  * Besides what the service itself offers, tests may ask (never from a browser's page):
- * `GET /_fake/events?account=&type=&intent=`, `POST /_fake/events/ID/redeliver`,
+ * `GET /_fake/events?account=&type=&intent=&draw=`, `POST /_fake/events/ID/redeliver`,
  * `POST /_fake/deliveries/hold {account?, metadata?}`, `GET /_fake/deliveries/held`,
- * `POST /_fake/deliveries/release {order}`, `POST /_fake/requests/hold {path}`,
+ * `POST /_fake/deliveries/release {order, account?, metadata?}`, `POST /_fake/requests/hold {path}`,
  * `GET /_fake/requests/hanging?count=`, `POST /_fake/requests/release`,
  * `POST /_fake/requests/drop-answer {path, times}`, `GET /_fake/cards`; and, with key and account as for the
  * service itself, `POST /_fake/payment_intents/ID/arrive` (a bank debit ends), `POST /_fake/refunds/ID/fail`.
@@ -175,8 +175,10 @@ export async function startStripeFake(options: StripeFakeOptions): Promise<Strip
         return sendJson(response, 200, { held: true });
       case 'GET /_fake/deliveries/held':
         return sendJson(response, 200, deliveries.listHeld());
-      case 'POST /_fake/deliveries/release':
-        return sendJson(response, 200, await deliveries.release(releaseShape.parse(given).order));
+      case 'POST /_fake/deliveries/release': {
+        const { order, ...filter } = releaseShape.parse(given);
+        return sendJson(response, 200, await deliveries.release(order, filter));
+      }
       case 'POST /_fake/requests/hold':
         faults.hold(pathShape.parse(given).path);
         return sendJson(response, 200, { held: true });
@@ -200,10 +202,12 @@ export async function startStripeFake(options: StripeFakeOptions): Promise<Strip
     const account = url.searchParams.get('account');
     const type = url.searchParams.get('type');
     const intent = url.searchParams.get('intent');
+    const draw = url.searchParams.get('draw');
     return store.state.events.filter(
       (event) =>
         (account === null || event.account === account) &&
         (type === null || event.type === type) &&
+        (draw === null || carries(event, { draw_id: draw })) &&
         (intent === null || event.data.object.id === intent || event.data.object.payment_intent === intent),
     );
   }

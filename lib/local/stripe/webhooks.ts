@@ -1,4 +1,5 @@
 import { createHmac } from 'node:crypto';
+import { isDeepStrictEqual } from 'node:util';
 import { nowUnix, type ApiEvent } from './objects';
 import type { Store } from './store';
 
@@ -25,12 +26,17 @@ export interface Delivered {
   readonly status: number;
 }
 
-const matches = (event: ApiEvent, filter: HoldFilter): boolean => {
-  if (filter.account !== undefined && event.account !== filter.account) return false;
+const plain = ({ account, metadata = {} }: HoldFilter) => ({ account: account ?? null, metadata });
+
+/** Whether an event's object has these metadata. */
+export function carries(event: ApiEvent, wanted: Readonly<Record<string, string>>): boolean {
   const { metadata } = event.data.object;
   const carried: Record<string, unknown> = typeof metadata === 'object' && metadata ? { ...metadata } : {};
-  return Object.entries(filter.metadata ?? {}).every(([key, value]) => carried[key] === value);
-};
+  return Object.entries(wanted).every(([key, value]) => carried[key] === value);
+}
+
+const matches = (event: ApiEvent, filter: HoldFilter): boolean =>
+  (filter.account === undefined || event.account === filter.account) && carries(event, filter.metadata ?? {});
 
 /** Delivers events, again when they are refused, and at other times or in other orders when a test asks. */
 export class Deliveries {
@@ -65,11 +71,17 @@ export class Deliveries {
     return this.held;
   }
 
-  /** Ends all holds and delivers what was held, one after another, newest first when reversed. */
-  async release(order: 'forward' | 'reverse'): Promise<Delivered[]> {
-    const events = order === 'reverse' ? this.held.toReversed() : this.held;
-    this.holds = [];
-    this.held = [];
+  /**
+   * Ends the holds that were asked for in these words (all, without a filter) and delivers what no other holds,
+   * one after another, newest first when reversed.
+   */
+  async release(order: 'forward' | 'reverse', filter: HoldFilter = {}): Promise<Delivered[]> {
+    const all = filter.account === undefined && filter.metadata === undefined;
+    this.holds = all ? [] : this.holds.filter((hold) => !isDeepStrictEqual(plain(hold), plain(filter)));
+    const stays = (event: ApiEvent) => this.holds.some((hold) => matches(event, hold));
+    const events = this.held.filter((event) => !stays(event));
+    this.held = this.held.filter(stays);
+    if (order === 'reverse') events.reverse();
     const delivered: Delivered[] = [];
     for (const event of events) delivered.push(await this.deliverOnce(event));
     return delivered;

@@ -362,7 +362,10 @@ describe('webhooks', () => {
     await sdk().paymentIntents.create({ ...deposit, metadata: { draw_id: 'd2' } }, TERN);
     await receiver.until(1);
     expect(receiver.received).toHaveLength(1);
-    await hook('POST', 'deliveries/release', { order: 'reverse' });
+    const about = { metadata: { draw_id: 'd1' } };
+    await hook('POST', 'deliveries/release', { order: 'reverse', account: 'acct_quillback', ...about });
+    expect(receiver.received).toHaveLength(1);
+    await hook('POST', 'deliveries/release', { order: 'reverse', account: 'acct_ternhollow', ...about });
     const types = receiver.received.map((one) => verify(one).type);
     expect(types).toEqual([
       'payment_intent.created',
