@@ -5,7 +5,7 @@ import path from 'node:path';
 import { promisify } from 'node:util';
 import postgres from 'postgres';
 import { plainSurroundings, programVariables } from './environment';
-import { lock } from './holders';
+import { holdersOf, lock } from './holders';
 import { localFolder, root } from './places';
 import { ensurePostgres, type Cluster } from './postgres';
 import { SetupFault } from './progress';
@@ -34,9 +34,13 @@ async function ensureTemplate(cluster: Cluster): Promise<string> {
   );
   try {
     const databases = await cluster.listDatabases();
+    const alone = holdersOf(path.join(localFolder('test'), 'postgres-users')).length === 1;
     for (const database of databases) {
       const [, kind, pid] = /^(test|building)_(\d+)_/.exec(database) ?? [];
       if (kind && !existsSync(`/proc/${pid}`)) await cluster.dropDatabase(database);
+      // Another run may still be copying an older template.
+      if (alone && database.startsWith('template_') && database !== template)
+        await cluster.dropDatabase(database);
     }
     if (databases.includes(template)) return template;
     const building = `building_${process.pid}_${randomBytes(3).toString('hex')}`;
