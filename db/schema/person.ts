@@ -53,13 +53,6 @@ export const people = pgTable(
       to: appUser,
       using: sql`${scopeKind} = 'user' and clerk_user_id = ${scopeKey} and (${scopeCompany} is null or company_id = ${scopeCompany})`,
     }),
-    pgPolicy('people_self_update', {
-      for: 'update',
-      to: appUser,
-      using: sql`${scopeKind} = 'user' and clerk_user_id = ${scopeKey}`,
-      // Only to take the sign-in away or to leave it.
-      withCheck: sql`${scopeKind} = 'user' and (clerk_user_id is null or clerk_user_id = ${scopeKey})`,
-    }),
   ],
 );
 

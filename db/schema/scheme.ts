@@ -1,3 +1,4 @@
+import { sql } from 'drizzle-orm';
 import {
   boolean,
   foreignKey,
@@ -39,7 +40,8 @@ export const schemes = pgTable(
   (t) => [
     primaryKey({ columns: [t.companyId, t.id] }),
     foreignKey({ columns: [t.companyId, t.jobId], foreignColumns: [jobs.companyId, jobs.id] }),
-    uniqueIndex('schemes_letter').on(t.companyId, t.jobId, t.letter),
+    // A letter is free again once its scheme is thrown away.
+    uniqueIndex('schemes_letter').on(t.companyId, t.jobId, t.letter).where(sql`archived_at is null`),
     ...policies('schemes', { guest: 'write' }),
   ],
 );

@@ -33,6 +33,9 @@ export const environmentShape = z.object({
 
   SMTP_URL: z.url(),
   MAIL_DOMAIN: z.string().min(3),
+
+  /** Stops the clock at an instant; heeded only where something stands in for a real service. */
+  STILEWRIGHT_CLOCK: z.iso.datetime().optional(),
 });
 
 export type Environment = z.infer<typeof environmentShape>;

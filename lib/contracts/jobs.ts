@@ -19,17 +19,23 @@ export const pageSealedJobShape = z.object({
 });
 export type PageSealedJob = z.infer<typeof pageSealedJobShape>;
 
-/** What is done in the background, by queue, with the shape of what each job is told. */
-export const JOB_SHAPES = {
-  mail: mailJobShape,
+/** What is done in the background, by queue, and what each job is told. */
+export interface JobPayloads {
+  mail: MailJob;
   /** Money was posted: its receipt goes out. */
-  paymentReceipt: receiptJobShape,
+  paymentReceipt: z.infer<typeof receiptJobShape>;
   /** A page was sealed: it is announced to the household and to the staff. */
-  pageSealed: pageSealedJobShape,
-} as const;
+  pageSealed: PageSealedJob;
+}
 
-export type Queue = keyof typeof JOB_SHAPES;
-export type JobPayload<Q extends Queue> = z.infer<(typeof JOB_SHAPES)[Q]>;
+export type Queue = keyof JobPayloads;
+export type JobPayload<Q extends Queue> = JobPayloads[Q];
+
+export const JOB_SHAPES: { readonly [Q in Queue]: z.ZodType<JobPayloads[Q]> } = {
+  mail: mailJobShape,
+  paymentReceipt: receiptJobShape,
+  pageSealed: pageSealedJobShape,
+};
 
 export const QUEUES: readonly Queue[] = ['mail', 'paymentReceipt', 'pageSealed'];
 
