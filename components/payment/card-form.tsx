@@ -6,6 +6,7 @@ import { useEffect, useMemo, useState, type FormEvent } from 'react';
 import { Button } from '@/components/ui/button';
 import { declineSentence, type PaymentStart } from '@/lib/contracts/payment';
 import { readAppearance } from './appearance';
+import { FetchingForm } from './pay-states';
 import { loadPaymentScript } from './load-stripe';
 import { formatCents } from './words';
 
@@ -69,7 +70,7 @@ export default function CardForm(props: Props) {
     () => ({ clientSecret: start.clientSecret, appearance, locale: 'en' as const }),
     [start.clientSecret, appearance],
   );
-  if (!stripe) return <p role="status">The card form is being fetched.</p>;
+  if (!stripe) return <FetchingForm />;
   return (
     <Elements stripe={stripe} options={options}>
       <Inner {...props} />

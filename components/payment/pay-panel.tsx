@@ -7,15 +7,34 @@ import {
   type PaymentStart,
   type PaymentView,
 } from '@/lib/contracts/payment';
+import { readJson, sendJson } from '@/components/ui/json';
 import { paths } from '@/lib/paths';
-import { ask } from './ask';
 import type { Outcome } from './card-form';
-import { Amount, Declined, Fetching, NotDue, Paid, Trouble, Waiting } from './pay-states';
-import { leftover, phaseAfterLook, SENTENCES, type Phase } from './pay-phase';
+import { Amount, Declined, Fetching, FetchingForm, NotDue, Paid, Trouble, Waiting } from './pay-states';
+import { phaseAfterLook, SENTENCES, type Phase } from './pay-phase';
 import { useDraw } from './use-draw';
 
 // Only this page fetches the payment service's libraries, and only once there is something to pay.
 const CardForm = lazy(() => import('./card-form'));
+
+/** The truth from the payment service, or null when it cannot be had just now. */
+async function lookUp(address: string): Promise<PaymentView | null> {
+  try {
+    return paymentViewShape.parse(await readJson(address));
+  } catch {
+    return null;
+  }
+}
+
+/** Gets the card form ready, or finds out why not. */
+async function begin(address: string, notice: string | null): Promise<Phase> {
+  const begun = await sendJson(address, 'POST', {});
+  if (begun.ok) return { kind: 'ready', start: paymentStartShape.parse(begun.value), notice };
+  // It may have been paid elsewhere a moment ago.
+  const found = begun.fault.code === 'conflict' ? await lookUp(address) : null;
+  const now = found && phaseAfterLook(found, null);
+  return now?.kind === 'waiting' ? now : { kind: 'cannot', sentence: begun.fault.sentence };
+}
 
 interface Props {
   /** The contractor's slug. */
@@ -35,36 +54,30 @@ export function PayPanel({ company, jobId, contractor, reasonNot, initial }: Pro
   const drawId = initial.draw.id;
   const address = paths.api.drawPayment(company, jobId, drawId);
   const [phase, setPhase] = useState<Phase>(() => phaseAfterLook(initial, null));
-  const [notice] = useState(() => leftover(initial));
   const draw = useDraw(company, jobId, initial.draw, phase.kind === 'waiting');
 
   const look = useCallback(
     async (start: PaymentStart | null) => {
       setPhase({ kind: 'looking', start });
-      const found = await ask(paymentViewShape, address);
-      setPhase(found.kind === 'value' ? phaseAfterLook(found.value, start) : { kind: 'lost', start });
+      const found = await lookUp(address);
+      setPhase(found ? phaseAfterLook(found, start) : { kind: 'lost', start });
     },
     [address],
   );
 
-  const starting = phase.kind === 'starting' && draw.state === 'due' && reasonNot === null;
+  const starts = phase.kind === 'starting' && draw.state === 'due' && reasonNot === null;
+  const earlier = phase.kind === 'starting' ? phase.notice : null;
   useEffect(() => {
-    if (!starting) return;
+    if (!starts) return;
     let gone = false;
-    const begin = async (): Promise<Phase> => {
-      const begun = await ask(paymentStartShape, address, 'POST');
-      if (begun.kind === 'value') return { kind: 'ready', start: begun.value, notice };
-      if (begun.kind === 'lost') return { kind: 'cannot', sentence: SENTENCES.cannotLoad };
-      // It may have been paid elsewhere a moment ago.
-      const found = await ask(paymentViewShape, address);
-      const now = found.kind === 'value' ? phaseAfterLook(found.value, null) : null;
-      return now?.kind === 'waiting' ? now : { kind: 'cannot', sentence: begun.sentence };
-    };
-    void begin().then((next) => gone || setPhase(next));
+    const cannot: Phase = { kind: 'cannot', sentence: SENTENCES.cannotLoad };
+    void begin(address, earlier)
+      .catch(() => cannot)
+      .then((next) => gone || setPhase(next));
     return () => {
       gone = true;
     };
-  }, [starting, address, notice]);
+  }, [starts, address, earlier]);
 
   // Back online, the question that got lost is asked again by itself.
   const lostStart = phase.kind === 'lost' ? phase.start : undefined;
@@ -113,7 +126,7 @@ export function PayPanel({ company, jobId, contractor, reasonNot, initial }: Pro
           contractor={contractor}
           sentence={phase.sentence}
           action="Try again"
-          onAction={() => setPhase({ kind: 'starting' })}
+          onAction={() => setPhase({ kind: 'starting', notice: null })}
         />
       )}
       {phase.kind === 'lost' && (
@@ -127,8 +140,8 @@ export function PayPanel({ company, jobId, contractor, reasonNot, initial }: Pro
       {phase.kind === 'ready' && phase.notice && <Declined sentence={phase.notice} />}
       {start && (
         // Kept while the truth is looked up, so that what was typed is still there.
-        <div hidden={phase.kind === 'lost'} className="mt-5">
-          <Suspense fallback={<p role="status">The card form is being fetched.</p>}>
+        <div hidden={phase.kind === 'lost'}>
+          <Suspense fallback={<FetchingForm />}>
             <CardForm
               start={start}
               returnPath={paths.payment(company, jobId, drawId)}

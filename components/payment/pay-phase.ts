@@ -2,8 +2,8 @@ import type { PaymentStart, PaymentView } from '@/lib/contracts/payment';
 
 /** Where the payer is, as far as this browser knows. The draw's own state comes before it. */
 export type Phase =
-  | { readonly kind: 'starting' }
-  /** The form is there; `notice` says why the last try did not pay. */
+  /** The form is being fetched; `notice` says why an earlier try did not pay. */
+  | { readonly kind: 'starting'; readonly notice: string | null }
   | { readonly kind: 'ready'; readonly start: PaymentStart; readonly notice: string | null }
   /** The card, and perhaps the bank, is being asked. */
   | { readonly kind: 'asking'; readonly start: PaymentStart }
@@ -32,6 +32,6 @@ export const leftover = ({ attempt }: PaymentView): string | null =>
 /** What the looked-up truth means for a payer who may still have the form open. */
 export function phaseAfterLook(view: PaymentView, start: PaymentStart | null): Phase {
   if (view.draw.state !== 'due' || isSent(view)) return { kind: 'waiting' };
-  if (!start) return { kind: 'starting' };
+  if (!start) return { kind: 'starting', notice: leftover(view) };
   return { kind: 'ready', start, notice: leftover(view) ?? SENTENCES.untouched };
 }

@@ -1,54 +1,70 @@
 import type { ReactNode } from 'react';
-import type { DrawView } from '@/lib/contracts/payment';
 import { Button } from '@/components/ui/button';
+import { Money } from '@/components/ui/money';
 import { Notice } from '@/components/ui/notice';
 import { Panel } from '@/components/ui/panel';
-import { formatCents, inFull, refundSentence, stateSentence } from './words';
+import { CallLine, type Contact } from '@/components/ui/states';
+import type { DrawView } from '@/lib/contracts/payment';
+import { inFull, refundSentence, stateSentence } from './words';
 
-interface Contractor {
-  readonly name: string;
-  readonly phone: string;
-}
-
-/** The sum in large figures with what it is for, and whatever is to be done about it beneath. */
-export function Amount({ draw, children }: { draw: DrawView; children?: ReactNode }) {
+/** A sum in the largest figures, with what it is for above and how it stands beneath. */
+function Sum({
+  label,
+  cents,
+  sentence,
+  live,
+}: {
+  label: string;
+  cents: number;
+  sentence: string;
+  live?: boolean;
+}) {
   return (
-    <Panel>
-      <p className="text-quiet">{draw.label}</p>
-      <p className="font-title text-tape tabular-nums">{formatCents(draw.amountCents)}</p>
-      <p className="mt-1">{stateSentence(draw)}</p>
-      {children}
-    </Panel>
+    <div>
+      <p className="text-quiet">{label}</p>
+      <p className="font-title text-tape font-semibold">
+        <Money cents={cents} />
+      </p>
+      <p className="text-lead" role={live ? 'status' : undefined}>
+        {sentence}
+      </p>
+    </div>
   );
 }
 
-/** Whom to call; a homeowner who is stuck over money always sees it. */
-function Help({ name, phone }: Contractor) {
+/** A draw that is not settled, with whatever is to be done about it beneath. */
+export function Amount({ draw, children }: { draw: DrawView; children?: ReactNode }) {
   return (
-    <p className="mt-5">
-      Questions? Call {name} at{' '}
-      <a className="underline" href={`tel:${phone.replace(/[^\d+]/g, '')}`}>
-        {phone}
-      </a>
-      .
-    </p>
+    <Panel className="grid max-w-3xl gap-5">
+      <Sum label={draw.label} cents={draw.amountCents} sentence={stateSentence(draw)} />
+      {children}
+    </Panel>
   );
 }
 
 export function Fetching({ draw }: { draw: DrawView }) {
   return (
     <Amount draw={draw}>
-      <p role="status" className="mt-5">
+      <FetchingForm />
+    </Amount>
+  );
+}
+
+/** Stands where the card form will, at its height, so that nothing moves when it comes. */
+export function FetchingForm() {
+  return (
+    <div className="min-h-[310px]">
+      <p role="status" className="text-quiet">
         The card form is being fetched.
       </p>
-    </Amount>
+    </div>
   );
 }
 
 export function NotDue({ draw }: { draw: DrawView }) {
   return (
     <Amount draw={draw}>
-      <p className="mt-5">There is nothing to pay yet. You will get a mail when it falls due.</p>
+      <p>There is nothing to pay yet. You will get a mail when it falls due.</p>
     </Amount>
   );
 }
@@ -56,14 +72,18 @@ export function NotDue({ draw }: { draw: DrawView }) {
 export function Paid({ draw }: { draw: DrawView }) {
   const refunded = refundSentence(draw);
   return (
-    <Panel>
-      <p className="text-quiet">{draw.label}</p>
-      <p className="font-title text-tape tabular-nums">{formatCents(draw.receivedCents)}</p>
-      <p role="status" className="mt-1">
-        {draw.paidOn ? `Received on ${inFull(draw.paidOn)}.` : 'Received.'} A receipt was sent by mail.
-      </p>
-      {draw.receipt && <p className="mt-3 text-quiet">{draw.receipt}</p>}
-      {refunded && <p className="mt-3">{refunded}</p>}
+    <Panel className="grid max-w-3xl gap-5">
+      <Sum
+        label={draw.label}
+        cents={draw.receivedCents}
+        sentence={draw.paidOn ? `Received on ${inFull(draw.paidOn)}.` : 'Received.'}
+        live
+      />
+      <div>
+        {draw.receipt && <p>{draw.receipt}</p>}
+        {refunded && <p>{refunded}</p>}
+        <p className="text-quiet">The receipt was sent to everyone of the household by mail.</p>
+      </div>
     </Panel>
   );
 }
@@ -76,26 +96,29 @@ export function Waiting({
   onLook,
 }: {
   draw: DrawView;
-  contractor: Contractor;
+  contractor: Contact;
   looking: boolean;
   onLook: () => void;
 }) {
   return (
-    <Panel>
-      <p className="text-quiet">{draw.label}</p>
-      <p className="font-title text-tape tabular-nums">{formatCents(draw.amountCents)}</p>
-      <p role="status" className="mt-1">
-        {draw.state === 'processing'
-          ? 'The bank is still working on it. This can take some days; you will get a mail when it has arrived.'
-          : 'The payment was sent and is being confirmed. This usually takes a few seconds.'}
-      </p>
-      <p className="mt-3">You need not pay again, and you can leave this page.</p>
-      <div className="mt-5">
+    <Panel className="grid max-w-3xl gap-5">
+      <Sum
+        label={draw.label}
+        cents={draw.amountCents}
+        sentence={
+          draw.state === 'processing'
+            ? 'On its way. The bank can take some days; you will get a mail when it has arrived.'
+            : 'Sent. It is being confirmed, which usually takes a few seconds.'
+        }
+        live
+      />
+      <p>You need not pay again, and you can leave this page.</p>
+      <div>
         <Button tone="quiet" onClick={onLook} disabled={looking}>
           {looking ? 'Looking' : 'Look again'}
         </Button>
       </div>
-      <Help {...contractor} />
+      <CallLine contact={contractor} />
     </Panel>
   );
 }
@@ -107,26 +130,29 @@ export function Trouble({
   action,
   onAction,
 }: {
-  contractor: Contractor;
+  contractor: Contact;
   sentence: string;
   action: string;
   onAction: () => void;
 }) {
   return (
-    <div className="mt-5">
-      <Notice kind="caution">{sentence}</Notice>
-      <div className="mt-5">
+    <>
+      <Notice kind="caution">
+        <p role="status">{sentence}</p>
+      </Notice>
+      <div>
         <Button onClick={onAction}>{action}</Button>
       </div>
-      <Help {...contractor} />
-    </div>
+      <CallLine contact={contractor} />
+    </>
   );
 }
 
+/** Why the last try did not pay. */
 export function Declined({ sentence }: { sentence: string }) {
   return (
-    <div role="alert" className="mt-5">
-      <Notice kind="caution">{sentence}</Notice>
-    </div>
+    <Notice kind="error" title="The payment did not go through">
+      {sentence}
+    </Notice>
   );
 }

@@ -1,7 +1,7 @@
 import useSWR from 'swr';
 import { scheduleViewShape, type DrawView } from '@/lib/contracts/payment';
 import { paths } from '@/lib/paths';
-import { ask } from './ask';
+import { readJson } from '@/components/ui/json';
 
 const WAITING_MS = 1500;
 /** Somebody else of the household may pay meanwhile, or the bank may take days. */
@@ -13,9 +13,8 @@ export function useDraw(company: string, jobId: string, first: DrawView, awaited
   const { data } = useSWR(
     [address, first.id],
     async () => {
-      const answer = await ask(scheduleViewShape, address);
-      if (answer.kind !== 'value') throw new Error(answer.kind === 'lost' ? 'not reached' : answer.sentence);
-      return answer.value.draws.find((draw) => draw.id === first.id) ?? first;
+      const schedule = scheduleViewShape.parse(await readJson(address));
+      return schedule.draws.find((draw) => draw.id === first.id) ?? first;
     },
     {
       fallbackData: first,

@@ -117,7 +117,7 @@ describe('after a look at the truth', () => {
 
   it('a first visit has nothing to say', () => {
     expect(leftover(view(null))).toBeNull();
-    expect(phaseAfterLook(view(null), null)).toEqual({ kind: 'starting' });
+    expect(phaseAfterLook(view(null), null)).toEqual({ kind: 'starting', notice: null });
   });
 });
 

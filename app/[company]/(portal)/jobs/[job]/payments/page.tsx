@@ -1,6 +1,7 @@
 import { auth } from '@clerk/nextjs/server';
 import { notFound, redirect } from 'next/navigation';
 import { Schedule } from '@/components/payment/schedule';
+import { PageTitle } from '@/components/ui/frame';
 import { paths } from '@/lib/paths';
 import { listDraws } from '@/lib/services/draw/list';
 import { resolveActor } from '@/lib/services/session/resolve-actor';
@@ -21,7 +22,7 @@ export default async function PaymentsPage({
   if (!schedule.ok) notFound();
   return (
     <>
-      <h1 className="font-title text-page">Payments</h1>
+      <PageTitle about={schedule.value.jobName}>Payments</PageTitle>
       <Schedule schedule={schedule.value} company={company} jobId={job} pays={actor.kind === 'guest'} />
     </>
   );

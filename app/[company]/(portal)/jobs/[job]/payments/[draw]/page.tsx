@@ -1,7 +1,9 @@
 import { auth } from '@clerk/nextjs/server';
-import Link from 'next/link';
 import { notFound, redirect } from 'next/navigation';
+import { readCompany } from '@/app/[company]/read-company';
 import { PayPanel } from '@/components/payment/pay-panel';
+import { ButtonLink } from '@/components/ui/button';
+import { PageTitle } from '@/components/ui/frame';
 import { drawName } from '@/lib/contracts/payment';
 import { reasonNot } from '@/lib/contracts/rights';
 import { paths } from '@/lib/paths';
@@ -20,7 +22,8 @@ export default async function PaymentPage({ params }: Props) {
   const { userId } = await auth();
   if (!userId) redirect(paths.signIn(company));
   const actor = await resolveActor({ slug: company, clerkUserId: userId, jobId: job });
-  if (!actor) notFound();
+  const contractor = await readCompany(company);
+  if (!actor || !contractor) notFound();
   const schedule = await listDraws(actor, { jobId: job });
   const draw = schedule.ok ? schedule.value.draws.find((one) => one.id === drawId) : undefined;
   if (!draw) notFound();
@@ -29,12 +32,19 @@ export default async function PaymentPage({ params }: Props) {
   const initial = looked?.ok ? looked.value : { draw, attempt: null };
   return (
     <>
-      <Link href={paths.payments(company, job)}>All payments</Link>
-      <h1 className="font-title text-page">{drawName(draw)}</h1>
+      <PageTitle
+        actions={
+          <ButtonLink tone="quiet" href={paths.payments(company, job)}>
+            All payments
+          </ButtonLink>
+        }
+      >
+        {drawName(draw)}
+      </PageTitle>
       <PayPanel
         company={company}
         jobId={job}
-        contractor={contractor}
+        contractor={{ name: contractor.name, phone: contractor.phone }}
         reasonNot={reasonNot(actor.role, 'draw.pay')}
         initial={initial}
       />
