@@ -1,18 +1,19 @@
 import { randomUUID } from 'node:crypto';
 import fc from 'fast-check';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { and, eq } from 'drizzle-orm';
+import { and, eq, sql } from 'drizzle-orm';
 import { z } from 'zod';
 import { closePool, withScope } from '@/db/client';
-import { audit, draws, webhookEvents } from '@/db/schema';
+import { audit, draws, ledger, webhookEvents } from '@/db/schema';
 import type { Actor } from '@/lib/contracts/actor';
-import type { PaymentStart } from '@/lib/contracts/payment';
+import { receiptJobShape, type PaymentStart } from '@/lib/contracts/payment';
 import type { Result } from '@/lib/contracts/result';
 import { cloneTestDatabase, type TestDatabase } from '@/lib/local/test-database';
 import { listDraws } from '@/lib/services/draw/list';
 import { readBalance } from '@/lib/services/ledger/balance';
 import { readPayment } from '@/lib/services/payment/read';
 import { refundPayment } from '@/lib/services/payment/refund';
+import { sendReceipt } from '@/lib/services/payment/send-receipt';
 import { startPayment } from '@/lib/services/payment/start';
 import {
   addContractor,
@@ -434,6 +435,45 @@ describe('the ledger', () => {
       expect(agreedCents + changesCents - paidCents + refundedCents).toBe(balanceCents);
     });
     await fc.assert(plays, { numRuns: 10 });
+  });
+});
+
+describe('the receipt', () => {
+  const jobRow = z.object({ name: z.string(), data: z.record(z.string(), z.unknown()) });
+  const queued = (queue: string, key: string, value: string) =>
+    withScope(tern.worker, async (tx) =>
+      z
+        .array(jobRow)
+        .parse([
+          ...(await tx.execute(
+            sql`select name, data from pgboss.job where name = ${queue} and data #>> string_to_array(${key}, '.') = ${value}`,
+          )),
+        ]),
+    );
+
+  it('is ordered once however often the event comes, and goes to each of the household in words of their payment', async () => {
+    const household = await addHousehold(tern);
+    const intentId = await begin(household);
+    await service.pay(tern.account, intentId);
+    await deliverAll(intentId);
+    for (const event of await service.events(intentId)) await deliver({ ...event, id: `${event.id}again` });
+    const [entry] = await withScope(tern.worker, (tx) =>
+      tx
+        .select({ id: ledger.id })
+        .from(ledger)
+        .where(and(eq(ledger.jobId, household.jobId), eq(ledger.kind, 'payment'))),
+    );
+    const ordered = await queued('paymentReceipt', 'ledgerId', entry?.id ?? '');
+    expect(ordered).toHaveLength(1);
+    await sendReceipt(receiptJobShape.parse(ordered[0]?.data));
+    for (const guest of household.guests) {
+      const mails = await queued('mail', 'to.email', guest.email);
+      expect(mails.map((mail) => mail.data.subject)).toEqual(['Payment 1 of 4 received']);
+      expect(mails[0]?.data.text).toContain('$3,120.00');
+      expect(mails[0]?.data.action).toMatchObject({
+        url: `${process.env.APP_ORIGIN}/tern-hollow/jobs/${household.jobId}/payments/${household.drawIds[0]}`,
+      });
+    }
   });
 });
 
