@@ -9,7 +9,11 @@ export type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0];
 
 /** Looks rows up by a key before anybody's scope is known; each kind shows what the key names and nothing else. */
 export type Lookup =
-  | { readonly kind: 'slug' | 'organization' | 'account'; readonly key: string; readonly companyId?: undefined }
+  | {
+      readonly kind: 'slug' | 'organization' | 'account';
+      readonly key: string;
+      readonly companyId?: undefined;
+    }
   /** A sign-in's rows, in all companies or in one. */
   | { readonly kind: 'user'; readonly key: string; readonly companyId?: string }
   /** What a person of a company belongs to. */

@@ -47,6 +47,8 @@ export const paths = {
     changeOrderDecision: (company: string, job: string, order: string) =>
       `/api/${part(company)}/jobs/${part(job)}/change-orders/${part(order)}/decision`,
     invitations: (company: string, job: string) => `/api/${part(company)}/jobs/${part(job)}/invitations`,
+    invitation: (company: string, job: string, invitation: string) =>
+      `/api/${part(company)}/jobs/${part(job)}/invitations/${part(invitation)}`,
     invitationAcceptance: (company: string, token: string) =>
       `/api/${part(company)}/invitations/${part(token)}/acceptance`,
     doorOrder: (company: string, job: string) => `/api/${part(company)}/jobs/${part(job)}/door-order`,

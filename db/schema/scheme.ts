@@ -41,7 +41,9 @@ export const schemes = pgTable(
     primaryKey({ columns: [t.companyId, t.id] }),
     foreignKey({ columns: [t.companyId, t.jobId], foreignColumns: [jobs.companyId, jobs.id] }),
     // A letter is free again once its scheme is thrown away.
-    uniqueIndex('schemes_letter').on(t.companyId, t.jobId, t.letter).where(sql`archived_at is null`),
+    uniqueIndex('schemes_letter')
+      .on(t.companyId, t.jobId, t.letter)
+      .where(sql`archived_at is null`),
     ...policies('schemes', { guest: 'write' }),
   ],
 );

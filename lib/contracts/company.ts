@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { companyBrandShape } from './brand';
 
 /** How a contractor sells: everything here is the owner's to set. */
 export const companySettingsShape = z.object({
@@ -22,3 +23,28 @@ export const companySettingsShape = z.object({
   salespersonLimitCents: z.number().int().min(0),
 });
 export type CompanySettings = z.infer<typeof companySettingsShape>;
+
+export const companyInputShape = z.object({
+  /** First part of every address of the company. */
+  slug: z
+    .string()
+    .regex(/^[a-z0-9]+(-[a-z0-9]+)*$/)
+    .max(60),
+  name: z.string().trim().min(1).max(120),
+  phone: z.string().trim().min(1).max(40),
+  licence: z.string().trim().max(80).nullable(),
+  /** IANA name, such as `America/New_York`. */
+  timeZone: z.string().refine((zone) => {
+    try {
+      return new Intl.DateTimeFormat('en-US', { timeZone: zone }) !== null;
+    } catch {
+      return false;
+    }
+  }, 'This is no time zone.'),
+  state: z.string().regex(/^[A-Z]{2}$/),
+  brand: companyBrandShape.shape.brand,
+  settings: companySettingsShape,
+  clerkOrganizationId: z.string().min(1),
+  stripeAccountId: z.string().startsWith('acct_'),
+});
+export type CompanyInput = z.infer<typeof companyInputShape>;

@@ -5,6 +5,7 @@ export const RIGHTS = {
   'job.list': ['owner', 'salesperson'],
   'job.read': ['owner', 'salesperson', 'homeowner'],
   'job.create': ['owner', 'salesperson'],
+  'job.moveStage': ['owner', 'salesperson'],
   'survey.import': ['owner', 'salesperson'],
   'edition.publish': ['owner'],
   'invitation.send': ['owner', 'salesperson'],

@@ -16,10 +16,7 @@ export async function revokeInvitation(actor: Actor, input: unknown): Promise<Re
   if (!may(actor.role, 'invitation.revoke')) {
     return refuse('notAllowed', reasonNot(actor.role, 'invitation.revoke') ?? 'This is not for you.');
   }
-  const own = and(
-    eq(invitations.companyId, actor.companyId),
-    eq(invitations.id, parsed.data.invitationId),
-  );
+  const own = and(eq(invitations.companyId, actor.companyId), eq(invitations.id, parsed.data.invitationId));
   const at = now();
   return withScope(actor, async (tx) => {
     const [row] = await tx.select().from(invitations).where(own).for('update');

@@ -105,9 +105,17 @@ export async function sendInvitation(actor: Actor, input: unknown): Promise<Resu
         `Open it with the address below and sign in with ${email}. A code comes to you by mail; you need no password. The invitation is for you alone and is good for ${INVITATION_DAYS} days.`,
         `Questions? Call ${company.name} at ${company.phone}.`,
       ].join('\n\n'),
-      action: { label: 'See your kitchen', url: environment().APP_ORIGIN + paths.invitation(company.slug, token) },
+      action: {
+        label: 'See your kitchen',
+        url: environment().APP_ORIGIN + paths.invitation(company.slug, token),
+      },
     });
-    await writeAudit(tx, actor, { verb: 'invitation.send', subject: row.id, jobId, detail: { email, signer } });
+    await writeAudit(tx, actor, {
+      verb: 'invitation.send',
+      subject: row.id,
+      jobId,
+      detail: { email, signer },
+    });
     return ok(invitationView(row, at));
   });
 }

@@ -57,7 +57,8 @@ async function syncUser(event: UserEvent): Promise<Synced> {
       // One delivery counts once in each company that knows the person.
       if (!(await takeEvent(tx, { ...event, id: `${event.id}/${companyId}` }, companyId))) return;
       taken = true;
-      const changes = event.type === 'userDeleted' ? { clerkUserId: null } : await savedChanges(tx, id, event);
+      const changes =
+        event.type === 'userDeleted' ? { clerkUserId: null } : await savedChanges(tx, id, event);
       await tx
         .update(people)
         .set(changes)
@@ -103,9 +104,7 @@ async function syncMembership(event: MembershipEvent): Promise<Synced> {
       const gone = await tx
         .update(members)
         .set({ active: false })
-        .where(
-          and(eq(members.companyId, company.id), eq(members.clerkMembershipId, event.membershipId)),
-        )
+        .where(and(eq(members.companyId, company.id), eq(members.clerkMembershipId, event.membershipId)))
         .returning({ personId: members.personId });
       for (const { personId } of gone) {
         await writeAudit(tx, worker, { verb: 'member.end', subject: personId, jobId: null, detail: {} });

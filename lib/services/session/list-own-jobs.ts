@@ -68,13 +68,7 @@ async function guestJobs(companyId: string, clerkUserId: string): Promise<string
     tx
       .select({ jobId: guests.jobId })
       .from(guests)
-      .where(
-        and(
-          eq(guests.companyId, companyId),
-          eq(guests.personId, person.id),
-          isNull(guests.revokedAt),
-        ),
-      ),
+      .where(and(eq(guests.companyId, companyId), eq(guests.personId, person.id), isNull(guests.revokedAt))),
   );
   return rows.map((row) => row.jobId);
 }
