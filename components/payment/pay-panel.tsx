@@ -114,13 +114,13 @@ export function PayPanel({ company, jobId, contractor, reasonNot, initial }: Pro
   if (reasonNot !== null) {
     return (
       <Amount draw={draw}>
-        <p className="mt-5">{reasonNot}</p>
+        <p>{reasonNot}</p>
       </Amount>
     );
   }
   if (phase.kind === 'starting') return <Fetching draw={draw} />;
   return (
-    <Amount draw={draw}>
+    <Amount draw={draw} sentence={phase.kind === 'lost' ? 'Not known yet.' : undefined}>
       {phase.kind === 'cannot' && (
         <Trouble
           contractor={contractor}

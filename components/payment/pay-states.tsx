@@ -7,38 +7,51 @@ import { CallLine, type Contact } from '@/components/ui/states';
 import type { DrawView } from '@/lib/contracts/payment';
 import { inFull, refundSentence, stateSentence } from './words';
 
-/** A sum in the largest figures, with what it is for above and how it stands beneath. */
-function Sum({
+/** A sum in the largest figures with how it stands; on a laptop, what is to be done about it lies beside. */
+function Sheet({
   label,
   cents,
   sentence,
   live,
+  children,
 }: {
   label: string;
   cents: number;
   sentence: string;
+  /** Whether a change of the sentence is read out. */
   live?: boolean;
+  children?: ReactNode;
 }) {
   return (
-    <div>
-      <p className="text-quiet">{label}</p>
-      <p className="font-title text-tape font-semibold">
-        <Money cents={cents} />
-      </p>
-      <p className="text-lead" role={live ? 'status' : undefined}>
-        {sentence}
-      </p>
-    </div>
+    <Panel className="grid gap-5 md:grid-cols-[minmax(0,2fr)_minmax(0,3fr)] md:gap-8">
+      <div>
+        <p className="text-quiet">{label}</p>
+        <p className="font-title text-tape font-semibold">
+          <Money cents={cents} />
+        </p>
+        <p className="text-lead" role={live ? 'status' : undefined}>
+          {sentence}
+        </p>
+      </div>
+      <div className="grid content-start gap-5">{children}</div>
+    </Panel>
   );
 }
 
-/** A draw that is not settled, with whatever is to be done about it beneath. */
-export function Amount({ draw, children }: { draw: DrawView; children?: ReactNode }) {
+/** A draw that is not settled, with whatever is to be done about it. */
+export function Amount({
+  draw,
+  sentence = stateSentence(draw),
+  children,
+}: {
+  draw: DrawView;
+  sentence?: string;
+  children?: ReactNode;
+}) {
   return (
-    <Panel className="grid max-w-3xl gap-5">
-      <Sum label={draw.label} cents={draw.amountCents} sentence={stateSentence(draw)} />
+    <Sheet label={draw.label} cents={draw.amountCents} sentence={sentence}>
       {children}
-    </Panel>
+    </Sheet>
   );
 }
 
@@ -72,19 +85,18 @@ export function NotDue({ draw }: { draw: DrawView }) {
 export function Paid({ draw }: { draw: DrawView }) {
   const refunded = refundSentence(draw);
   return (
-    <Panel className="grid max-w-3xl gap-5">
-      <Sum
-        label={draw.label}
-        cents={draw.receivedCents}
-        sentence={draw.paidOn ? `Received on ${inFull(draw.paidOn)}.` : 'Received.'}
-        live
-      />
-      <div>
-        {draw.receipt && <p>{draw.receipt}</p>}
+    <Sheet
+      label={draw.label}
+      cents={draw.receivedCents}
+      sentence={draw.paidOn ? `Received on ${inFull(draw.paidOn)}.` : 'Received.'}
+      live
+    >
+      <div className="grid gap-2">
+        {draw.receipt && <p>{draw.receipt}.</p>}
         {refunded && <p>{refunded}</p>}
         <p className="text-quiet">The receipt was sent to everyone of the household by mail.</p>
       </div>
-    </Panel>
+    </Sheet>
   );
 }
 
@@ -101,17 +113,16 @@ export function Waiting({
   onLook: () => void;
 }) {
   return (
-    <Panel className="grid max-w-3xl gap-5">
-      <Sum
-        label={draw.label}
-        cents={draw.amountCents}
-        sentence={
-          draw.state === 'processing'
-            ? 'On its way. The bank can take some days; you will get a mail when it has arrived.'
-            : 'Sent. It is being confirmed, which usually takes a few seconds.'
-        }
-        live
-      />
+    <Sheet
+      label={draw.label}
+      cents={draw.amountCents}
+      sentence={
+        draw.state === 'processing'
+          ? 'On its way. The bank can take some days; you will get a mail when it has arrived.'
+          : 'Sent. It is being confirmed, which usually takes a few seconds.'
+      }
+      live
+    >
       <p>You need not pay again, and you can leave this page.</p>
       <div>
         <Button tone="quiet" onClick={onLook} disabled={looking}>
@@ -119,7 +130,7 @@ export function Waiting({
         </Button>
       </div>
       <CallLine contact={contractor} />
-    </Panel>
+    </Sheet>
   );
 }
 

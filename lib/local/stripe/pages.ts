@@ -30,7 +30,7 @@ body { margin: 0; padding: 2px; font-family: var(--fontFamily); color: var(--col
 .Input::placeholder { color: var(--colorTextPlaceholder); opacity: 1; }
 .Input:focus { outline: 2px solid var(--colorPrimary); outline-offset: 1px; }
 .Input--invalid { border-color: var(--colorDanger); }
-.Error { min-height: 1.4em; margin-top: 2px; font-size: var(--fontSizeSm); color: var(--colorDanger); }
+.Error { min-height: 1.4em; margin: 2px 0 4px; line-height: 1.3; font-size: var(--fontSizeSm); color: var(--colorDanger); }
 .row { display: flex; gap: calc(var(--spacingUnit) * 3); }
 .row > div { flex: 1; min-width: 0; }
 `;

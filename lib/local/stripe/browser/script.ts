@@ -139,7 +139,8 @@ import type { Answer, Appearance, FromFrame, Keys, ToFrame } from './messages';
       this.frame = new Frame(
         'payment',
         'Secure payment input frame',
-        'display:block;width:100%;height:190px',
+        // As far out as the frame's own margin reaches, which leaves room for the fields' outlines.
+        'display:block;margin:-2px;width:calc(100% + 4px);height:200px',
         this.elements.keys,
         () => this.elements.options.appearance ?? {},
         (message) => this.hear(message),
