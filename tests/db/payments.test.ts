@@ -3,12 +3,14 @@ import fc from 'fast-check';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { and, eq, sql } from 'drizzle-orm';
 import { z } from 'zod';
+import { POST } from '@/app/api/webhooks/stripe/route';
 import { closePool, withScope } from '@/db/client';
 import { audit, draws, ledger, webhookEvents } from '@/db/schema';
 import type { Actor } from '@/lib/contracts/actor';
 import { receiptJobShape, type PaymentStart } from '@/lib/contracts/payment';
 import type { Result } from '@/lib/contracts/result';
 import { cloneTestDatabase, type TestDatabase } from '@/lib/local/test-database';
+import { signPayload } from '@/lib/local/stripe/webhooks';
 import { listDraws } from '@/lib/services/draw/list';
 import { readBalance } from '@/lib/services/ledger/balance';
 import { readPayment } from '@/lib/services/payment/read';
@@ -292,6 +294,33 @@ describe('bank debits', () => {
     expect(held.draws[0]?.state).toBe('due');
     expect(held.ledger.map((entry) => entry.kind)).toEqual(['agreement']);
     expect(await begin(household)).toBe(intentId);
+  });
+});
+
+describe("the webhook's door", () => {
+  const knock = (body: string, signature: string | null) =>
+    POST(
+      new Request('http://localhost:4300/api/webhooks/stripe', {
+        method: 'POST',
+        body,
+        headers: signature === null ? {} : { 'stripe-signature': signature },
+      }),
+    );
+
+  it('opens to what is signed, byte for byte, and answers 400 to everything else', async () => {
+    const household = await addHousehold(tern);
+    const intentId = await begin(household);
+    await service.pay(tern.account, intentId);
+    const before = await readHeld(tern, household);
+    const [event] = (await service.events(intentId)).slice(-1);
+    const body = JSON.stringify(event, null, 2);
+    const signature = signPayload(body, process.env.STRIPE_WEBHOOK_SECRET ?? '');
+    expect((await knock(`${body} `, signature)).status).toBe(400);
+    expect((await knock(body, signPayload(body, 'whsec_other'))).status).toBe(400);
+    expect((await knock(body, null)).status).toBe(400);
+    expect(await readHeld(tern, household)).toEqual(before);
+    expect((await knock(body, signature)).status).toBe(200);
+    expect((await readHeld(tern, household)).draws[0]?.state).toBe('paid');
   });
 });
 

@@ -133,16 +133,16 @@ describe('accounts', () => {
     const charge = String(paid.latest_charge);
     for (const other of [QUILL, undefined]) {
       for (const work of [
-        stripe.paymentIntents.retrieve(intent.id, {}, other),
-        stripe.paymentIntents.confirm(intent.id, { payment_method: 'pm_card_visa' }, other),
-        stripe.paymentIntents.cancel(intent.id, {}, other),
-        stripe.charges.retrieve(charge, {}, other),
-        stripe.refunds.create({ payment_intent: intent.id }, other),
-        stripe.refunds.retrieve(refund.id, {}, other),
-        stripe.customers.retrieve(customer.id, {}, other),
-        stripe.events.retrieve(event?.id ?? '', {}, other),
+        () => stripe.paymentIntents.retrieve(intent.id, {}, other),
+        () => stripe.paymentIntents.confirm(intent.id, { payment_method: 'pm_card_visa' }, other),
+        () => stripe.paymentIntents.cancel(intent.id, {}, other),
+        () => stripe.charges.retrieve(charge, {}, other),
+        () => stripe.refunds.create({ payment_intent: intent.id }, other),
+        () => stripe.refunds.retrieve(refund.id, {}, other),
+        () => stripe.customers.retrieve(customer.id, {}, other),
+        () => stripe.events.retrieve(event?.id ?? '', {}, other),
       ]) {
-        expect((await faultOf(work)).statusCode).toBe(404);
+        expect((await faultOf(work())).statusCode).toBe(404);
       }
     }
     expect((await stripe.events.list({}, QUILL)).data).toEqual([]);
