@@ -119,6 +119,8 @@ export function PayPanel({ company, jobId, contractor, reasonNot, initial }: Pro
     );
   }
   if (phase.kind === 'starting') return <Fetching draw={draw} />;
+  // A change order has drawn up the schedule anew while the form was open.
+  const moved = phase.kind === 'ready' && phase.start.draw.amountCents !== draw.amountCents;
   return (
     <Amount draw={draw} sentence={phase.kind === 'lost' ? 'Not known yet.' : undefined}>
       {phase.kind === 'cannot' && (
@@ -137,8 +139,16 @@ export function PayPanel({ company, jobId, contractor, reasonNot, initial }: Pro
           onAction={() => void look(phase.start)}
         />
       )}
-      {phase.kind === 'ready' && phase.notice && <Declined sentence={phase.notice} />}
-      {start && (
+      {moved && (
+        <Trouble
+          contractor={contractor}
+          sentence={SENTENCES.moved}
+          action="Go on with the new sum"
+          onAction={() => setPhase({ kind: 'starting', notice: null })}
+        />
+      )}
+      {phase.kind === 'ready' && !moved && phase.notice && <Declined sentence={phase.notice} />}
+      {start && !moved && (
         // Kept while the truth is looked up, so that what was typed is still there.
         <div hidden={phase.kind === 'lost'}>
           <Suspense fallback={<FetchingForm />}>

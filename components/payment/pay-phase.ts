@@ -18,6 +18,7 @@ export const SENTENCES = {
   cannotLoad:
     'The card form could not be fetched. Nothing was charged. Please check the connection and try again.',
   notAnswered: 'The bank’s question was not answered, so nothing was charged. You can try again.',
+  moved: 'The sum of this payment has just changed. Nothing was charged. Please look at the new sum first.',
   untouched: 'The connection was lost before the card was charged. Nothing was charged. You can try again.',
   lost: 'The connection was lost, and it cannot be seen from here whether the card was charged. The form stays closed until that is known, so that you are never charged twice.',
 } as const;
