@@ -24,32 +24,21 @@ export const audit = pgTable(
   ],
 );
 
-// A worker sees its company's events; an event of no company belongs to whoever looks its subject up.
-const eventScope = sql`${scopeKind} in ('worker', 'organization', 'account', 'user')
-  and (company_id is null or company_id = ${scopeCompany})`;
+const ownWorker = sql`company_id = ${scopeCompany} and ${scopeKind} = 'worker'`;
 
-/** Webhook events already taken, so that a second delivery changes nothing. */
+/** Webhook events already taken by a company, so that a second delivery changes nothing. */
 export const webhookEvents = pgTable(
   'webhook_events',
   {
+    companyId: companyId(),
     source: text('source', { enum: ['clerk', 'stripe'] }).notNull(),
     eventId: text('event_id').notNull(),
-    /** Company the event belongs to, where it belongs to one. */
-    companyId: uuid('company_id'),
     type: text('type').notNull(),
     receivedAt: createdAt(),
   },
   (t) => [
-    primaryKey({ columns: [t.source, t.eventId] }),
-    pgPolicy('webhook_events_select', {
-      for: 'select',
-      to: appUser,
-      using: eventScope,
-    }),
-    pgPolicy('webhook_events_insert', {
-      for: 'insert',
-      to: appUser,
-      withCheck: eventScope,
-    }),
+    primaryKey({ columns: [t.companyId, t.source, t.eventId] }),
+    pgPolicy('webhook_events_select', { for: 'select', to: appUser, using: ownWorker }),
+    pgPolicy('webhook_events_insert', { for: 'insert', to: appUser, withCheck: ownWorker }),
   ],
 );

@@ -30,7 +30,7 @@ export async function syncClerkEvent(event: ClerkEvent): Promise<Synced> {
 async function takeEvent(
   tx: Transaction,
   event: { readonly id: string; readonly type: string },
-  companyId: string | null,
+  companyId: string,
 ): Promise<boolean> {
   const [fresh] = await tx
     .insert(webhookEvents)
@@ -55,7 +55,7 @@ async function syncUser(event: UserEvent): Promise<Synced> {
     const worker: Worker = { kind: 'worker', companyId };
     await withScope(worker, async (tx) => {
       // One delivery counts once in each company that knows the person.
-      if (!(await takeEvent(tx, { ...event, id: `${event.id}/${companyId}` }, companyId))) return;
+      if (!(await takeEvent(tx, event, companyId))) return;
       taken = true;
       const changes =
         event.type === 'userDeleted' ? { clerkUserId: null } : await savedChanges(tx, id, event);

@@ -1,0 +1,5 @@
+ALTER TABLE "webhook_events" DROP CONSTRAINT "webhook_events_source_event_id_pk";--> statement-breakpoint
+ALTER TABLE "webhook_events" ALTER COLUMN "company_id" SET NOT NULL;--> statement-breakpoint
+ALTER TABLE "webhook_events" ADD CONSTRAINT "webhook_events_company_id_source_event_id_pk" PRIMARY KEY("company_id","source","event_id");--> statement-breakpoint
+ALTER POLICY "webhook_events_select" ON "webhook_events" TO app_user USING (company_id = (select nullif(current_setting('app.company', true), '')::uuid) and (select nullif(current_setting('app.kind', true), '')) = 'worker');--> statement-breakpoint
+ALTER POLICY "webhook_events_insert" ON "webhook_events" TO app_user WITH CHECK (company_id = (select nullif(current_setting('app.company', true), '')::uuid) and (select nullif(current_setting('app.kind', true), '')) = 'worker');
