@@ -16,6 +16,8 @@ export interface Sync {
   readonly past: readonly Draft[];
   readonly future: readonly Draft[];
   readonly offline: boolean;
+  /** Why the server could not just now; tried again when the person asks. */
+  readonly trouble: string | null;
   /** Somebody else changed the same thing meanwhile; nothing is sent until one is chosen. */
   readonly conflict: { readonly theirs: Stored } | null;
   /** The server refused for good, with its sentence. */
@@ -33,6 +35,7 @@ export const startSync = (stored: Stored, waiting: readonly Edit[] = []): Sync =
   past: [],
   future: [],
   offline: false,
+  trouble: null,
   conflict: null,
   refused: null,
   mismatch: null,
@@ -59,18 +62,25 @@ export type SyncEvent =
   | { readonly kind: 'undo' | 'redo'; readonly id: string }
   | { readonly kind: 'send' }
   | { readonly kind: 'stored'; readonly stored: Stored }
-  | { readonly kind: 'lost' }
+  /** Without a sentence the connection is gone; with one the server could not, and says so. */
+  | { readonly kind: 'lost'; readonly sentence?: string }
   | { readonly kind: 'online' }
   | { readonly kind: 'conflict'; readonly theirs: Stored }
   | { readonly kind: 'refused'; readonly sentence: string }
   | { readonly kind: 'mismatch'; readonly hereCents: number; readonly thereCents: number }
   | { readonly kind: 'keepMine' | 'takeTheirs' }
   | { readonly kind: 'refreshed'; readonly stored: Stored }
-  | { readonly kind: 'noticed' };
+  | { readonly kind: 'noticed' }
+  | { readonly kind: 'restored'; readonly base: Stored; readonly edits: readonly Edit[] };
 
 /** Whether an edit may be sent now. */
 export const maySend = (sync: Sync): boolean =>
-  sync.waiting.length > 0 && !sync.sending && !sync.offline && !sync.conflict && !sync.mismatch;
+  sync.waiting.length > 0 &&
+  !sync.sending &&
+  !sync.offline &&
+  !sync.trouble &&
+  !sync.conflict &&
+  !sync.mismatch;
 
 /** The scheme after something happened. Pure; what is sent and stored is the caller's doing. */
 export function advance(sync: Sync, event: SyncEvent): Sync {
@@ -94,9 +104,15 @@ export function advance(sync: Sync, event: SyncEvent): Sync {
       return { ...sync, stored: event.stored, sending: null };
     case 'lost':
       // It may have arrived or not: sent again on the version it was made on, the server tells.
-      return { ...sync, sending: null, waiting: unsent(sync), offline: true };
+      return {
+        ...sync,
+        sending: null,
+        waiting: unsent(sync),
+        offline: event.sentence === undefined,
+        trouble: event.sentence ?? null,
+      };
     case 'online':
-      return { ...sync, offline: false };
+      return { ...sync, offline: false, trouble: null };
     case 'conflict':
       return meet(sync, event.theirs);
     case 'refused':
@@ -116,6 +132,14 @@ export function advance(sync: Sync, event: SyncEvent): Sync {
     case 'refreshed':
       if (event.stored.version <= sync.stored.version) return sync;
       return unsent(sync).length === 0 ? startSync(event.stored) : meet(sync, event.stored);
+    case 'restored': {
+      // Left behind by an earlier page: made on `base`, met with what the server holds now.
+      if (unsent(sync).length > 0) return sync;
+      const before = startSync(event.base, event.edits);
+      return event.base.version < sync.stored.version
+        ? meet(before, sync.stored)
+        : { ...before, stored: sync.stored };
+    }
     case 'noticed':
       return { ...sync, merged: false, refused: null };
   }

@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useId, useRef, useState, type ReactNode } from 'react';
+import { useId, useState, type ReactNode } from 'react';
 import { classNames } from '@/components/ui/class-names';
 import { Arrow } from '@/components/ui/difference';
 import { LengthText } from '@/components/ui/length';
@@ -46,7 +46,10 @@ export function PriceTape({
       aria-label="Price"
       className="sticky bottom-0 z-20 overflow-hidden rounded-frame border border-case bg-case text-on-case dark:border-hairline"
     >
-      <Announcement sentence={`The total is ${formatCents(priced.total)}, ${words}.`} />
+      {/* Read out whenever its words change, and not when the page opens. */}
+      <p role="status" className="sr-only">
+        The total is {formatCents(priced.total)}, {words}.
+      </p>
       <div
         id={linesId}
         inert={!open}
@@ -96,22 +99,6 @@ export function PriceTape({
 }
 
 const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
-
-/** Says the sentence politely whenever it changes, and not when the page opens. */
-function Announcement({ sentence }: { sentence: string }) {
-  const [said, setSaid] = useState('');
-  const first = useRef(sentence);
-  useEffect(() => {
-    if (first.current === sentence) return;
-    first.current = '';
-    setSaid(sentence);
-  }, [sentence]);
-  return (
-    <p role="status" aria-live="polite" className="sr-only">
-      {said}
-    </p>
-  );
-}
 
 /** The steel itself; the figures beside it say the same, so it is hidden from those who listen. */
 function BladeDrawing({ blade, baseline }: { blade: Blade; baseline: Baseline }) {
