@@ -29,8 +29,9 @@ import {
 import { FitNotes } from './fit-notes';
 import { InsideBand, insidePlaces } from './inside-band';
 import { kitchenWords } from './kitchen-words';
-import { OptionBand } from './option-band';
+import { OptionBand, UnsureBlock } from './option-band';
 import { OptionPicture } from './option-picture';
+import { HatchDefinition } from './pictures/paper';
 import { RoomPanel } from './room-panel';
 import { SchemeMenu } from './scheme-menu';
 import { changesBetween, type DecisionMark } from './scheme-edit';
@@ -203,6 +204,7 @@ function OneScheme({
       data-wide
       className="grid h-full grid-cols-[minmax(0,1fr)] grid-rows-[minmax(14rem,1fr)_auto_auto_auto] gap-frame"
     >
+      <HatchDefinition />
       <RoomPanel
         massing={room}
         survey={survey}
@@ -260,7 +262,7 @@ function OneScheme({
       />
       <section
         aria-label="What is being chosen"
-        className="flex min-w-0 flex-wrap items-center gap-x-5 gap-y-1 rounded-frame border border-hairline bg-panel px-1 py-1 md:px-5"
+        className="flex min-w-0 flex-wrap items-center gap-x-3 gap-y-1 rounded-frame border border-hairline bg-panel px-2 py-1 md:gap-x-5 md:px-4 lg:flex-nowrap"
       >
         <WallNavigation
           massing={room}
@@ -282,17 +284,8 @@ function OneScheme({
                 ? `${salesperson} will talk it over with you.`
                 : `${salesperson} proposes this. Keep it or choose another.`
           }
-          unsure={unsure}
-          salesperson={salesperson}
           onScope={setScope}
           onStep={step}
-          onUnsure={() =>
-            act(
-              unsure ? 'No longer left open' : 'Left open',
-              [],
-              [{ key: at, as: unsure ? 'open' : 'unsure' }],
-            )
-          }
         />
       </section>
       <section
@@ -319,6 +312,19 @@ function OneScheme({
           )}
           onChoose={choose}
           onAsk={setAskedAbout}
+          after={
+            <UnsureBlock
+              unsure={unsure}
+              salesperson={salesperson}
+              onPress={() =>
+                act(
+                  unsure ? 'No longer left open' : `Left to ${salesperson}`,
+                  [],
+                  [{ key: at, as: unsure ? 'open' : 'unsure' }],
+                )
+              }
+            />
+          }
         />
         {askedAbout && (
           <WhyNot

@@ -18,54 +18,40 @@ export function DecisionHead({
   scope,
   scopes,
   status,
-  unsure,
-  salesperson,
   onScope,
   onStep,
-  onUnsure,
 }: {
   decision: Decision;
   scope: ZoneOrKitchen;
   scopes: readonly ZoneOrKitchen[];
   status: string;
-  unsure: boolean;
-  salesperson: string;
   onScope: (scope: ZoneOrKitchen) => void;
   onStep: (by: -1 | 1) => void;
-  onUnsure: () => void;
 }) {
   const place = scopes.length > 1 ? ` of the ${PLACE_NAMES[scope]}` : '';
   return (
-    <div className="flex min-w-0 flex-1 flex-wrap items-center gap-x-5 gap-y-1">
-      <div className="flex min-w-0 flex-1 basis-64 items-center gap-1">
+    <>
+      <div className="min-w-0 flex-1 basis-40">
+        <h1 className="font-title text-reading leading-6 font-semibold md:text-lead" aria-live="polite">
+          {decision.title}
+          {place}
+        </h1>
+        <p className="text-note text-quiet">{status}</p>
+      </div>
+      <div className="flex min-w-0 basis-full items-center justify-between gap-1 lg:basis-auto lg:gap-3">
         <StepButton by={-1} onStep={onStep} />
-        <div className="min-w-0 flex-1 md:flex-none">
-          <h1 className="font-title text-reading leading-6 font-semibold md:text-lead" aria-live="polite">
-            {decision.title}
-            {place}
-          </h1>
-          <p className="text-note text-quiet">{status}</p>
-        </div>
+        {scopes.length > 1 && (
+          <RadioBlocks
+            label="Where this choice applies"
+            blocks={scopes.map((one) => ({ value: one, label: SCOPE_NAMES[one] }))}
+            value={scope}
+            onChoose={onScope}
+            className="flex min-w-0 overflow-x-auto [&>*]:-ml-px [&>*]:shrink-0 [&>*]:text-note [&>*]:first:ml-0 md:[&>*]:text-label"
+          />
+        )}
         <StepButton by={1} onStep={onStep} />
       </div>
-      {scopes.length > 1 && (
-        <RadioBlocks
-          label="Where this choice applies"
-          blocks={scopes.map((one) => ({ value: one, label: SCOPE_NAMES[one] }))}
-          value={scope}
-          onChoose={onScope}
-          className="flex max-w-full overflow-x-auto [&>*]:-ml-px [&>*]:shrink-0 [&>*]:text-label [&>*]:first:ml-0"
-        />
-      )}
-      <button
-        type="button"
-        aria-pressed={unsure}
-        onClick={onUnsure}
-        className="min-h-target px-1 text-label underline underline-offset-4 aria-pressed:font-semibold aria-pressed:text-brand"
-      >
-        {unsure ? `Left to ${salesperson}` : `Not sure, ask ${salesperson}`}
-      </button>
-    </div>
+    </>
   );
 }
 

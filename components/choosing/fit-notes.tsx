@@ -31,26 +31,25 @@ export function FitNotes({ notes, onWayOut }: { notes: readonly FitNote[]; onWay
   return (
     <div
       className={classNames(
-        'flex flex-wrap items-center gap-x-3 border-t px-3 py-1 md:px-5',
+        'flex items-center gap-x-3 border-t px-3 py-1 md:px-5',
         grave ? 'border-caution/40 bg-caution-ground text-caution' : 'border-hairline text-quiet',
       )}
     >
-      <p className="min-w-0 flex-1 basis-56 py-1 text-note md:text-label">
-        <span className="font-semibold">{NAMES[first.severity]}: </span>
+      <button
+        type="button"
+        aria-haspopup="dialog"
+        onClick={() => setOpen(true)}
+        className="min-h-target min-w-0 flex-1 py-1 text-left text-note md:text-label"
+      >
         <span className="line-clamp-2">
+          <span className="font-semibold">{NAMES[first.severity]}: </span>
           <LengthText text={first.homeowner} />
         </span>
-      </p>
-      <span className="flex items-center gap-x-1">
-        {first.wayOut && <WayOutButton note={first} onWayOut={onWayOut} />}
-        <button
-          type="button"
-          onClick={() => setOpen(true)}
-          className="min-h-target min-w-target px-2 text-label font-semibold underline underline-offset-4"
-        >
-          {sorted.length === 1 ? 'See which' : `All ${sorted.length} notes`}
-        </button>
-      </span>
+        <span className="font-semibold whitespace-nowrap underline underline-offset-4">
+          {sorted.length === 1 ? 'See which' : `All ${sorted.length} fit notes`}
+        </span>
+      </button>
+      {first.wayOut && <WayOutButton note={first} onWayOut={onWayOut} />}
       <Dialog
         open={open}
         onOpenChange={setOpen}
@@ -102,7 +101,7 @@ function WayOutButton({ note, onWayOut }: { note: FitNote; onWayOut: WayOut }) {
     <button
       type="button"
       onClick={() => onWayOut(wayOut.label, wayOut.changes)}
-      className="min-h-target rounded-frame border border-current px-3 text-label font-semibold"
+      className="min-h-target max-w-36 shrink-0 rounded-frame border border-current px-3 text-note font-semibold md:max-w-none md:text-label"
     >
       <LengthText text={wayOut.label} />
     </button>

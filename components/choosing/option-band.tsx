@@ -18,6 +18,7 @@ export function OptionBand({
   picture,
   onChoose,
   onAsk,
+  after,
 }: {
   label: string;
   options: readonly OptionState[];
@@ -29,8 +30,11 @@ export function OptionBand({
   onChoose: (option: OptionState) => void;
   /** Somebody wants to know about an option that cannot be had. */
   onAsk: (option: OptionState) => void;
+  /** Stands behind the last block. */
+  after?: ReactNode;
 }) {
   const group = useRef<HTMLDivElement>(null);
+  const band = useRef<HTMLDivElement>(null);
   const chosenAt = Math.max(
     0,
     options.findIndex((option) => option.chosen),
@@ -40,10 +44,11 @@ export function OptionBand({
 
   // The chosen block is in sight when a decision opens; later the band stays where the person scrolled it.
   useLayoutEffect(() => {
-    const band = group.current;
-    const block = band?.querySelector<HTMLElement>('[aria-checked=true]');
-    if (!band || !block) return;
-    band.scrollLeft = block.offsetLeft - band.offsetLeft - (band.clientWidth - block.clientWidth) / 2;
+    const scroller = band.current;
+    const block = scroller?.querySelector<HTMLElement>('[aria-checked=true]');
+    if (!scroller || !block) return;
+    const left = block.getBoundingClientRect().left - scroller.getBoundingClientRect().left;
+    scroller.scrollLeft += left - (scroller.clientWidth - block.clientWidth) / 2;
   }, [label]);
 
   function press(option: OptionState) {
@@ -71,24 +76,25 @@ export function OptionBand({
 
   return (
     <div
-      ref={group}
-      role="radiogroup"
-      aria-label={label}
+      ref={band}
       className="flex snap-x scroll-px-3 gap-2 overflow-x-auto overscroll-x-contain px-3 pt-3 pb-2 md:scroll-px-5 md:gap-3 md:px-5"
     >
-      {options.map((option, index) => (
-        <OptionBlock
-          key={option.id}
-          option={option}
-          confirmed={confirmed}
-          proposedBy={proposedBy}
-          tabIndex={index === tabStop ? 0 : -1}
-          onKeyDown={(event) => move(event, index)}
-          onFocus={() => setStop(index)}
-          onPress={() => press(option)}
-          picture={picture(option)}
-        />
-      ))}
+      <div ref={group} role="radiogroup" aria-label={label} className="flex gap-2 md:gap-3">
+        {options.map((option, index) => (
+          <OptionBlock
+            key={option.id}
+            option={option}
+            confirmed={confirmed}
+            proposedBy={proposedBy}
+            tabIndex={index === tabStop ? 0 : -1}
+            onKeyDown={(event) => move(event, index)}
+            onFocus={() => setStop(index)}
+            onPress={() => press(option)}
+            picture={picture(option)}
+          />
+        ))}
+      </div>
+      {after}
     </div>
   );
 }
@@ -123,7 +129,7 @@ function OptionBlock({
       onKeyDown={onKeyDown}
       onFocus={onFocus}
       onClick={onPress}
-      className="group grid w-31.5 shrink-0 snap-start content-start gap-1 text-left md:w-37.5"
+      className="relative grid w-34 shrink-0 snap-start content-start gap-1 text-left md:w-37.5"
     >
       <span
         className={classNames(
@@ -174,5 +180,46 @@ function PencilTick() {
       <path d="M6 22 C9 25 12 29 15 33 C20 22 27 12 37 5" stroke="#fbfcf9" strokeWidth="8.5" />
       <path d="M6 22 C9 25 12 29 15 33 C20 22 27 12 37 5" stroke="var(--tape-mark)" strokeWidth="4.5" />
     </svg>
+  );
+}
+
+/** Leaves a decision to the salesperson, or takes it back. */
+export function UnsureBlock({
+  unsure,
+  salesperson,
+  onPress,
+}: {
+  unsure: boolean;
+  salesperson: string;
+  onPress: () => void;
+}) {
+  return (
+    <button
+      type="button"
+      aria-pressed={unsure}
+      onClick={onPress}
+      className="relative grid w-34 shrink-0 snap-start content-start gap-1 text-left md:w-37.5"
+    >
+      <span
+        className={classNames(
+          'relative block h-19 border border-dashed transition-transform duration-swap md:h-24',
+          unsure ? '-translate-y-[3px] border-brand text-brand' : 'border-ink/45 text-quiet',
+        )}
+      >
+        <svg
+          viewBox="0 0 150 96"
+          className="absolute inset-0 size-full"
+          aria-hidden="true"
+          fill="none"
+          stroke="currentColor"
+        >
+          <path d="M60 38 C60 18 90 18 90 38 C90 51 75 50 75 62" strokeWidth="4" strokeLinecap="round" />
+          <circle cx="75" cy="75" r="3" fill="currentColor" stroke="none" />
+        </svg>
+        {unsure && <PencilTick />}
+      </span>
+      <span className={classNames('text-label', unsure && 'font-semibold')}>Not sure, ask {salesperson}</span>
+      {unsure && <span className="text-price font-semibold text-brand">asked</span>}
+    </button>
   );
 }

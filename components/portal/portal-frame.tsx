@@ -64,7 +64,7 @@ export function PortalFrame({
       <PortalHeader {...header} />
       <main
         id="main"
-        className="mx-auto grid w-full max-w-5xl content-start gap-frame has-[[data-wide]]:max-w-none"
+        className="mx-auto grid w-full max-w-5xl content-start gap-frame has-[[data-wide]]:max-w-none has-[[data-wide]]:content-stretch"
       >
         {children}
       </main>

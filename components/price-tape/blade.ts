@@ -49,11 +49,11 @@ export function shortBlade(baselineCents: number, totalCents: number): Blade {
   return lay(centre - 2 * NUMERAL, centre + 2 * NUMERAL, baselineCents, totalCents);
 }
 
-/** The laptop's blade: hook and end both in sight, at least $5,000 wide. */
+/** The laptop's blade: hook and end both in sight with some steel before them, at least $5,000 wide. */
 export function longBlade(baselineCents: number, totalCents: number): Blade {
   const low = Math.min(baselineCents, totalCents);
   const high = Math.max(baselineCents, totalCents);
-  const from = floorTo(low - 8 * TICK, NUMERAL);
+  const from = floorTo(low - 28 * TICK, NUMERAL);
   const to = Math.max(from + 5 * NUMERAL, ceilTo(high + 8 * TICK, NUMERAL));
   return lay(from, to, baselineCents, totalCents);
 }

@@ -44,7 +44,10 @@ export function PriceTape({
   return (
     <section
       aria-label="Price"
-      className="sticky bottom-0 z-20 overflow-hidden rounded-frame border border-case bg-case text-on-case dark:border-hairline"
+      className="sticky bottom-0 z-20 rounded-frame border border-case bg-case text-on-case dark:border-hairline"
+      onKeyDown={(event) => {
+        if (event.key === 'Escape') setOpen(false);
+      }}
     >
       {/* Read out whenever its words change, and not when the page opens. */}
       <p role="status" className="sr-only">
@@ -54,7 +57,7 @@ export function PriceTape({
         id={linesId}
         inert={!open}
         className={classNames(
-          'grid transition-[grid-template-rows] duration-swap',
+          'absolute inset-x-[-1px] bottom-full grid transition-[grid-template-rows] duration-swap',
           open ? 'grid-rows-[1fr]' : 'grid-rows-[0fr]',
         )}
       >
@@ -62,18 +65,20 @@ export function PriceTape({
           <Lines priced={priced} taxPlace={taxPlace} />
         </div>
       </div>
-      <div className="md:grid md:grid-cols-[auto_1fr_auto] md:items-stretch">
-        <div className="flex flex-wrap items-center justify-between gap-x-3 px-3 pt-2 pb-1 md:block md:px-5 md:py-2">
-          <p className="font-title text-[2.125rem] leading-10 font-semibold tabular-nums md:text-tape">
+      <div className="lg:grid lg:grid-cols-[auto_1fr_auto] lg:items-stretch">
+        <div className="flex flex-wrap items-center justify-between gap-x-2 px-3 pt-2 pb-1 md:px-5 lg:block lg:py-2">
+          <p className="font-title text-page leading-10 font-semibold tabular-nums md:text-tape">
             {formatCents(priced.total)}
           </p>
-          <div className="md:hidden">{action}</div>
+          <div className="lg:hidden [&_a]:px-3 [&_a]:text-label [&_button]:px-3 [&_button]:text-label">
+            {action}
+          </div>
           <button
             type="button"
             aria-expanded={open}
             aria-controls={linesId}
             onClick={() => setOpen(!open)}
-            className="-mx-1 flex min-h-target w-full items-center gap-x-2 px-1 text-left text-label md:min-h-7 md:w-auto"
+            className="-mx-1 flex min-h-target w-full items-center gap-x-2 px-1 text-left text-label lg:min-h-7 lg:w-auto"
           >
             <span className="tabular-nums">
               {difference !== 0 && (
@@ -86,13 +91,13 @@ export function PriceTape({
             <span className="underline underline-offset-4">{open ? 'Roll up' : 'See why'}</span>
           </button>
         </div>
-        <div className="self-center md:hidden">
-          <BladeDrawing blade={shortBlade(baselineCents, priced.total)} baseline={baseline} />
+        <div className="self-center lg:hidden">
+          <BladeDrawing blade={shortBlade(baselineCents, priced.total)} baseline={baseline} numeral={17} />
         </div>
-        <div className="hidden min-w-0 self-center md:block">
-          <BladeDrawing blade={longBlade(baselineCents, priced.total)} baseline={baseline} />
+        <div className="hidden min-w-0 self-center lg:block">
+          <BladeDrawing blade={longBlade(baselineCents, priced.total)} baseline={baseline} numeral={8} />
         </div>
-        {action && <div className="hidden items-center px-5 md:flex">{action}</div>}
+        {action && <div className="hidden items-center px-5 lg:flex">{action}</div>}
       </div>
     </section>
   );
@@ -101,7 +106,16 @@ export function PriceTape({
 const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
 
 /** The steel itself; the figures beside it say the same, so it is hidden from those who listen. */
-function BladeDrawing({ blade, baseline }: { blade: Blade; baseline: Baseline }) {
+function BladeDrawing({
+  blade,
+  baseline,
+  numeral,
+}: {
+  blade: Blade;
+  baseline: Baseline;
+  /** The width of a numeral in per cent of the window: one that the blade's end would cut is left out. */
+  numeral: number;
+}) {
   const less = blade.end < blade.hook;
   const from = Math.min(blade.hook, blade.end);
   return (
@@ -123,7 +137,7 @@ function BladeDrawing({ blade, baseline }: { blade: Blade; baseline: Baseline })
             />
           ))}
           {blade.ticks
-            .filter((tick) => tick.numeral && tick.place < 99)
+            .filter((tick) => tick.numeral && (tick.place + numeral < blade.end || tick.place > blade.end))
             .map((tick) => (
               <text
                 key={tick.cents}
@@ -180,7 +194,12 @@ function BladeDrawing({ blade, baseline }: { blade: Blade; baseline: Baseline })
 /** The lines by zone, each with its because, and how they add up to the total. */
 function Lines({ priced, taxPlace }: { priced: Priced; taxPlace?: string }) {
   return (
-    <div className="max-h-[min(60dvh,36rem)] overflow-y-auto border-b border-on-blade bg-blade px-3 py-3 text-on-blade md:px-5">
+    <div
+      tabIndex={0}
+      role="region"
+      aria-label="What the total is made of"
+      className="max-h-[min(64dvh,40rem)] overflow-y-auto overscroll-contain rounded-t-frame border border-on-blade bg-blade px-3 py-3 text-on-blade outline-offset-[-3px] md:px-5"
+    >
       <div className="grid gap-x-13 gap-y-5 lg:grid-cols-2">
         {groupLines(priced.lines).map((group) => (
           <section key={group.zone} aria-label={group.name}>

@@ -2,7 +2,10 @@ import type { Fault, FaultCode, Result } from '@/lib/contracts/result';
 import { FAULT_STATUS } from '@/lib/contracts/result';
 
 /** What stands for an answer that never came. */
-export const LOST: Fault = { code: 'unavailable', sentence: 'The connection is gone just now. Please try again.' };
+export const LOST: Fault = {
+  code: 'unavailable',
+  sentence: 'The connection is gone just now. Please try again.',
+};
 const LATER = 'That did not work just now. Please try again in a moment.';
 
 const isCode = (code: unknown): code is FaultCode => typeof code === 'string' && code in FAULT_STATUS;

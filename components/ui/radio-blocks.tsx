@@ -1,6 +1,6 @@
 'use client';
 
-import { useRef, type KeyboardEvent, type ReactNode } from 'react';
+import { useEffect, useRef, type KeyboardEvent, type ReactNode } from 'react';
 import { classNames } from './class-names';
 
 export interface RadioBlock<Value extends string> {
@@ -39,6 +39,15 @@ export function RadioBlocks<Value extends string>({
   const chosenIndex = blocks.findIndex((block) => block.value === value);
   const stop = chosenIndex === -1 ? 0 : chosenIndex;
 
+  // In a group that scrolls sideways the chosen block is in sight.
+  useEffect(() => {
+    const scroller = group.current;
+    const block = scroller?.querySelectorAll<HTMLElement>('[role=radio]')[stop];
+    if (!scroller || !block || scroller.scrollWidth <= scroller.clientWidth) return;
+    const left = block.getBoundingClientRect().left - scroller.getBoundingClientRect().left;
+    scroller.scrollLeft += left - (scroller.clientWidth - block.clientWidth) / 2;
+  }, [stop]);
+
   function move(event: KeyboardEvent<HTMLElement>, from: number) {
     const last = blocks.length - 1;
     const to = {
@@ -76,7 +85,7 @@ export function RadioBlocks<Value extends string>({
             className={
               blockClassName ??
               classNames(
-                'inline-flex min-h-target min-w-target items-center justify-center border px-3 py-1 text-reading',
+                'relative inline-flex min-h-target min-w-target items-center justify-center border px-3 py-1 text-reading',
                 chosen ? 'border-brand bg-brand font-semibold text-on-brand' : 'border-ink/45 bg-panel',
                 block.disabled && 'cursor-not-allowed text-quiet',
               )

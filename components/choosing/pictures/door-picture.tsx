@@ -4,8 +4,8 @@ import { Paper } from './paper';
 /** Units of the drawing per 1/64 inch: a door of 16 by 26 inches stands 84 high. */
 const SCALE = 84 / (26 * 64);
 const DOOR = { width: 16 * 64, height: 26 * 64 };
-/** The section is drawn three times as large. */
-const SECTION = SCALE * 3.4;
+/** The section's own scale: three quarters of an inch is 15 units. */
+const SECTION = 15 / 48;
 
 const n = (value: number): string => value.toFixed(2);
 
@@ -19,7 +19,7 @@ export function DoorPicture({ style, colour }: { style: DoorStyle; colour: strin
   const five = style.construction === 'fivePiece';
   return (
     <Paper>
-      <g transform={`translate(16 ${n((96 - h) / 2)})`}>
+      <g transform={`translate(16 ${n((96 - h) / 2)})`} stroke="var(--on-blade)">
         <rect width={n(w)} height={n(h)} fill={colour} strokeWidth="1.4" />
         {five && (
           <>
@@ -78,18 +78,18 @@ function Boards({
 
 /** Looking down on the cut: the stile hatched, the panel in its groove. */
 function Section({ style }: { style: DoorStyle }) {
-  const left = 84;
+  const left = 78;
   const middle = 48;
   const t = style.thickness * SECTION;
   if (style.construction !== 'fivePiece') {
-    return <rect x={left} y={n(middle - t / 2)} width="52" height={n(t)} fill="url(#hatch)" />;
+    return <rect x={left} y={n(middle - t / 2)} width="58" height={n(t)} fill="url(#hatch)" />;
   }
-  const s = Math.min(style.stile * SECTION, 30);
+  const s = Math.min(style.stile * SECTION, 40);
   const p = Math.max(style.panelThickness * SECTION, 2);
   const g = Math.max(style.groove * SECTION, 2.5);
   const face = middle + t / 2;
   const back = middle - t / 2;
-  const panelEnd = left + 58;
+  const panelEnd = left + 60;
   // The panel's face comes forward where it is raised.
   const raised = style.panel === 'raised';
   const front = raised ? face - 1 : middle + p / 2;

@@ -9,6 +9,7 @@ export interface GrainLine {
   readonly depth: number;
   /** Pores: a broken line; unbroken when absent. */
   readonly dashes?: string;
+  readonly offset?: number;
 }
 
 /** A small generator of numbers in [0, 1) from a word (mulberry32 on an FNV-1a hash). */
@@ -33,19 +34,26 @@ export function grainLines(kind: GrainKind, seed: string, width: number, height:
   const lines: GrainLine[] = [];
   const middle = width * (0.35 + random() * 0.3);
   const arches = kind === 'fine' ? 3 : 5;
-  const pores = kind === 'coarse' ? '7 4' : kind === 'medium' ? '16 5' : undefined;
+  // Coarse woods show their pores as short strokes, fine ones hardly at all.
+  const pore = { fine: 0, medium: 16, coarse: 9 }[kind];
+  const broken = (): Pick<GrainLine, 'dashes' | 'offset'> => {
+    if (pore === 0 || random() < 0.15) return {};
+    const stroke = () => pore * (0.5 + random());
+    const dashes = `${at(stroke())} ${at(2 + random() * 3)} ${at(stroke() * 1.8)} ${at(1.5 + random() * 4)}`;
+    return { dashes, offset: Math.round(random() * 40) };
+  };
   for (let n = 0; n < arches; n++) {
-    const spread = 5 + n * (SPACING[kind] + 1.5) + random() * 2;
-    const apex = height * (0.08 + 0.1 * n + random() * 0.05) - height * 0.25;
-    const lean = (random() - 0.5) * 6;
+    const spread = 6 + n * (SPACING[kind] + 2) + random() * 2;
+    const apex = height * (0.16 * n + random() * 0.08 - 0.3);
+    const top = middle + (random() - 0.5) * 4;
     lines.push({
-      path: `M${at(middle - spread)} ${at(height + 4)} C${at(middle - spread * 0.9)} ${at(height * 0.5)} ${at(middle - spread * 0.35)} ${at(apex + 10)} ${at(middle + lean)} ${at(apex)} C${at(middle + spread * 0.4)} ${at(apex + 10)} ${at(middle + spread * 0.92)} ${at(height * 0.5)} ${at(middle + spread)} ${at(height + 4)}`,
-      width: 0.6 + random() * 0.8,
-      depth: 0.35 + random() * 0.35,
-      dashes: pores,
+      path: `M${at(middle - spread)} ${at(height + 4)} C${at(middle - spread * 0.97)} ${at(height * 0.55)} ${at(top - spread * 0.62)} ${at(apex)} ${at(top)} ${at(apex)} C${at(top + spread * 0.62)} ${at(apex)} ${at(middle + spread * 0.97)} ${at(height * 0.55)} ${at(middle + spread)} ${at(height + 4)}`,
+      width: 0.5 + random() * 0.8,
+      depth: 0.3 + random() * 0.35,
+      ...broken(),
     });
   }
-  const clear = 5 + arches * (SPACING[kind] + 1.5);
+  const clear = 6 + arches * (SPACING[kind] + 2);
   for (const side of [-1, 1]) {
     let x = middle + side * clear;
     while (x > -4 && x < width + 4) {
@@ -53,11 +61,11 @@ export function grainLines(kind: GrainKind, seed: string, width: number, height:
       const drift = side * random() * 3;
       lines.push({
         path: `M${at(x)} -3 C${at(x + sway)} ${at(height * 0.3)} ${at(x - sway)} ${at(height * 0.65)} ${at(x + drift)} ${at(height + 3)}`,
-        width: 0.5 + random() * 0.9,
-        depth: 0.2 + random() * 0.45,
-        dashes: random() < 0.7 ? pores : undefined,
+        width: 0.4 + random() * 0.8,
+        depth: 0.18 + random() * 0.4,
+        ...broken(),
       });
-      x += side * SPACING[kind] * (0.55 + random() * 0.9);
+      x += side * SPACING[kind] * (0.4 + random() * 0.9);
     }
   }
   return lines;

@@ -29,6 +29,7 @@ export function MaterialBlock({ colour, grain, seed }: { colour: string; grain: 
               strokeWidth={line.width}
               strokeOpacity={line.depth}
               strokeDasharray={line.dashes}
+              strokeDashoffset={line.offset}
             />
           ))}
         </g>

@@ -4,11 +4,11 @@ import { Paper } from './paper';
 const n = (value: number): string => value.toFixed(2);
 
 /**
- * A moulding's section as it is installed, against the cabinet's face, all kinds at one scale: an inch is 14 units,
- * so that a taller crown looks taller.
+ * A moulding's section as it is installed, against the cabinet's face, each kind at one scale, so that a taller
+ * crown looks taller.
  */
 export function SectionPicture({ profile }: { profile: MouldingProfile }) {
-  const scale = Math.min(14, 70 / (profile.height / 64)) / 64;
+  const scale = Math.min(profile.kind === 'base' ? 13 : 19, 70 / (profile.height / 64)) / 64;
   const height = profile.height * scale;
   const left = 60;
   const foot = profile.kind === 'base' ? 84 : 48 + height / 2;
@@ -45,7 +45,7 @@ export function SectionPicture({ profile }: { profile: MouldingProfile }) {
         fill="currentColor"
         className="length-fraction font-title"
       >
-        {inchesOf(profile.height)}″
+        {inchesOf(profile.height)}″ high
       </text>
     </Paper>
   );

@@ -10,10 +10,10 @@ import { NonePicture, Paper } from './paper';
 
 const n = (value: number): string => value.toFixed(2);
 
-/** A pull in its own colour on the corner of a door, at two thirds of an inch to ten units. */
+/** A pull in its own colour; an inch between its screws is 18 units. */
 export function PullPicture({ pull }: { pull: Pull }) {
   if (pull.form === 'none') return <NonePicture />;
-  const length = Math.min(112, Math.max(40, (pull.centres / 64) * 15));
+  const length = Math.min(112, Math.max(44, (pull.centres / 64) * 18));
   const left = 75 - length / 2;
   return (
     <Paper>
@@ -83,7 +83,7 @@ export function OverlayPicture({ overlay, colour }: { overlay: Overlay; colour: 
 export function EndPicture({ end, colour }: { end: EndTreatment; colour: string }) {
   return (
     <Paper>
-      <rect x="42" y="8" width="66" height="80" fill={colour} strokeWidth="1.4" />
+      <rect x="42" y="8" width="66" height="80" fill={colour} strokeWidth="1.4" stroke="var(--on-blade)" />
       {end.kind === 'panelled' && (
         <>
           <rect x="53" y="19" width="44" height="58" />
