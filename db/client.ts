@@ -65,3 +65,11 @@ export async function withScope<T>(scope: Scope, work: (tx: Transaction) => Prom
     return work(tx);
   });
 }
+
+/**
+ * Makes transactions about one job take turns until this one ends: whatever reads and then writes by what it read
+ * holds it. A guest may, too, though the job's row is not theirs to lock.
+ */
+export async function lockJob(tx: Transaction, companyId: string, jobId: string): Promise<void> {
+  await tx.execute(sql`select pg_advisory_xact_lock(hashtextextended(${`${companyId}/${jobId}`}, 0))`);
+}

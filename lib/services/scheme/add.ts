@@ -1,5 +1,5 @@
 import { and, eq, isNull } from 'drizzle-orm';
-import type { Transaction } from '@/db/client';
+import { lockJob, type Transaction } from '@/db/client';
 import { jobs, schemeHistory, schemes } from '@/db/schema';
 import { now } from '@/lib/adapters/clock';
 import type { Actor } from '@/lib/contracts/actor';
@@ -26,6 +26,7 @@ export async function addScheme(
 ): Promise<Result<SchemeView>> {
   const { companyId } = actor;
   const { jobId, choices, totalCents } = scheme;
+  await lockJob(tx, companyId, jobId);
   const taken = await tx
     .select({ letter: schemes.letter })
     .from(schemes)
