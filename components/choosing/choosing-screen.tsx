@@ -22,6 +22,7 @@ import {
   decisionsOf,
   ownAnswers,
   scopesOf,
+  swapWords,
   type Decision,
   type DecisionKey,
   type Part,
@@ -202,7 +203,7 @@ function OneScheme({
   return (
     <div
       data-wide
-      className="grid h-full grid-cols-[minmax(0,1fr)] grid-rows-[minmax(14rem,1fr)_auto_auto_auto] gap-frame"
+      className="grid h-full grid-cols-[minmax(0,1fr)] grid-rows-[minmax(min-content,1fr)_auto_auto_auto] gap-frame"
     >
       <HatchDefinition />
       <RoomPanel
@@ -310,6 +311,7 @@ function OneScheme({
           picture={(option) => (
             <OptionPicture at={at} option={option.id} edition={edition} choices={choices} scope={scope} />
           )}
+          swapWords={(option) => swapWords(edition, option.swaps)}
           onChoose={choose}
           onAsk={setAskedAbout}
           after={

@@ -6,7 +6,7 @@ export function ChoosingSkeleton() {
     <div
       data-wide
       role="status"
-      className="grid h-full grid-cols-[minmax(0,1fr)] grid-rows-[minmax(14rem,1fr)_auto_auto_auto] gap-frame"
+      className="grid h-full grid-cols-[minmax(0,1fr)] grid-rows-[minmax(16rem,1fr)_auto_auto_auto] gap-frame"
     >
       <span className="sr-only">Your kitchen is being drawn.</span>
       <div className="grid place-items-center rounded-frame border border-hairline bg-panel p-5">

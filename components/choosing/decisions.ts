@@ -102,3 +102,9 @@ export function changeWords(edition: Edition, change: ChoiceChange): string {
   const place = change.zone === 'kitchen' ? '' : `, ${PLACE_NAMES[change.zone]}`;
   return `${title}${place}: ${optionName(edition, change.key, change.option)}`;
 }
+
+/** What an option brings with it, named once each: `with Hard maple, clear`. */
+export function swapWords(edition: Edition, swaps: readonly ChoiceChange[]): string {
+  const names = swaps.flatMap((swap) => ('key' in swap ? [optionName(edition, swap.key, swap.option)] : []));
+  return names.length === 0 ? '' : `with ${[...new Set(names)].join(', ')}`;
+}

@@ -16,6 +16,7 @@ export function OptionBand({
   confirmed,
   proposedBy,
   picture,
+  swapWords,
   onChoose,
   onAsk,
   after,
@@ -27,6 +28,8 @@ export function OptionBand({
   /** First name of who proposed. */
   proposedBy: string;
   picture: (option: OptionState) => ReactNode;
+  /** What else an option changes, such as `with Hard maple`. */
+  swapWords: (option: OptionState) => string;
   onChoose: (option: OptionState) => void;
   /** Somebody wants to know about an option that cannot be had. */
   onAsk: (option: OptionState) => void;
@@ -91,6 +94,7 @@ export function OptionBand({
             onFocus={() => setStop(index)}
             onPress={() => press(option)}
             picture={picture(option)}
+            swapWords={swapWords(option)}
           />
         ))}
       </div>
@@ -108,6 +112,7 @@ function OptionBlock({
   onFocus,
   onPress,
   picture,
+  swapWords,
 }: {
   option: OptionState;
   confirmed: boolean;
@@ -117,6 +122,7 @@ function OptionBlock({
   onFocus: () => void;
   onPress: () => void;
   picture: ReactNode;
+  swapWords: string;
 }) {
   const off = option.availability === 'notAvailable';
   return (
@@ -157,10 +163,10 @@ function OptionBlock({
           <Difference cents={option.delta} none="same price" className="text-ink" />
         )}
       </span>
-      {option.availability === 'availableWithSwap' && !option.chosen && option.reason && (
+      {option.availability === 'availableWithSwap' && !option.chosen && (
         <span className="text-note text-quiet">
           <span className="sr-only">, </span>
-          {option.reason}
+          <LengthText text={swapWords} />
         </span>
       )}
     </button>

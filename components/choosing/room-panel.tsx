@@ -28,7 +28,7 @@ export function RoomPanel({
   return (
     <section
       aria-label="Your kitchen"
-      className="grid min-h-0 min-w-0 grid-rows-[auto_minmax(0,1fr)_auto] overflow-hidden rounded-frame border border-hairline bg-panel"
+      className="grid min-w-0 grid-rows-[auto_minmax(11rem,1fr)_auto] overflow-hidden rounded-frame border border-hairline bg-panel"
     >
       <div className="flex min-w-0 items-center gap-x-1 border-b border-hairline px-1 md:gap-x-3 md:px-4">
         {tools}

@@ -119,12 +119,12 @@ function BladeDrawing({
   const less = blade.end < blade.hook;
   const from = Math.min(blade.hook, blade.end);
   return (
-    <div aria-hidden="true" className="relative h-12 overflow-hidden text-on-blade">
+    <div aria-hidden="true" className="relative h-10 overflow-hidden text-on-blade lg:h-12">
       <div
         className="absolute inset-0 bg-blade transition-[clip-path] duration-swap"
         style={{ clipPath: `inset(0 ${(100 - blade.end).toFixed(3)}% 0 0)` }}
       >
-        <svg width="100%" height="48" className="absolute inset-0">
+        <svg width="100%" height="100%" className="absolute inset-0">
           {blade.ticks.map((tick) => (
             <line
               key={tick.cents}
@@ -143,7 +143,7 @@ function BladeDrawing({
                 key={tick.cents}
                 x={`${tick.place}%`}
                 dx="6"
-                y="39"
+                y="36"
                 fontSize="15"
                 fill="currentColor"
                 className="font-title tabular-nums"
@@ -203,10 +203,10 @@ function Lines({ priced, taxPlace }: { priced: Priced; taxPlace?: string }) {
       <div className="grid gap-x-13 gap-y-5 lg:grid-cols-2">
         {groupLines(priced.lines).map((group) => (
           <section key={group.zone} aria-label={group.name}>
-            <h3 className="flex items-baseline justify-between gap-3 border-b border-on-blade/60 font-title text-lead font-semibold">
+            <h2 className="flex items-baseline justify-between gap-3 border-b border-on-blade/60 font-title text-lead font-semibold">
               <span>{group.name}</span>
               <span className="text-price tabular-nums">{formatCents(group.sumCents)}</span>
-            </h3>
+            </h2>
             <ul>
               {group.lines.map((line) => (
                 <li

@@ -39,6 +39,7 @@ function show(confirmed: boolean) {
         confirmed={confirmed}
         proposedBy="Rowan"
         picture={() => null}
+        swapWords={() => 'with a clear finish'}
         onChoose={choose}
         onAsk={ask}
       />,
@@ -88,6 +89,7 @@ describe('the band of options', () => {
     expect(radio(1).textContent).toBe('Cherry,  + $1,184 more');
     expect(radio(2).textContent).toBe('Maple,  − $310 less');
     expect(radio(0).textContent).toContain('chosen');
+    expect(radio(3).textContent).toContain('with a clear finish');
     expect(radio(4).textContent).toContain('Not with this door.');
   });
 
