@@ -16,11 +16,23 @@ import { invitationView } from './state';
 
 const DAY_MS = 86_400_000;
 
+/** An invitation with the token that its mail carries. The token is nowhere stored and goes to no screen. */
+export interface Issued {
+  readonly invitation: InvitationView;
+  readonly token: string;
+}
+
 /**
  * Invites somebody to a job by mail. An earlier open invitation of the same address to the same job ends, so that
  * one link at a time is good. A measured job that has a scheme to show is at choosing from then on.
  */
 export async function sendInvitation(actor: Actor, input: unknown): Promise<Result<InvitationView>> {
+  const issued = await issueInvitation(actor, input);
+  return issued.ok ? ok(issued.value.invitation) : issued;
+}
+
+/** As {@link sendInvitation}, and hands the token out; for set-up, where nobody reads the mail. */
+export async function issueInvitation(actor: Actor, input: unknown): Promise<Result<Issued>> {
   const parsed = invitationInputShape.safeParse(input);
   if (!parsed.success) {
     return refuse('invalid', 'The invitation needs a name and a mail address.', {
@@ -116,6 +128,6 @@ export async function sendInvitation(actor: Actor, input: unknown): Promise<Resu
       jobId,
       detail: { email, signer },
     });
-    return ok(invitationView(row, at));
+    return ok({ invitation: invitationView(row, at), token });
   });
 }
