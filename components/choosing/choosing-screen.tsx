@@ -27,6 +27,7 @@ import {
   type DecisionKey,
   type Part,
 } from './decisions';
+import { elevations } from './elevation';
 import { FitNotes } from './fit-notes';
 import { InsideBand, insidePlaces } from './inside-band';
 import { kitchenWords } from './kitchen-words';
@@ -130,6 +131,7 @@ function OneScheme({
   const { choices } = draft;
   const taken = useMemo(() => takeoff(survey, edition, choices, terms), [survey, edition, choices, terms]);
   const room = useMemo(() => massing(survey, edition, choices), [survey, edition, choices]);
+  const walls = useMemo(() => elevations(room), [room]);
   const words = useMemo(
     () => kitchenWords({ survey, edition, choices, takeoff: taken }),
     [survey, edition, choices, taken],
@@ -187,7 +189,11 @@ function OneScheme({
     // Staying with the doors keeps the decision at hand: only the place changes.
     const next = ofPart.find((one) => one.key === at) ?? ofPart[0];
     if (!next) return;
-    if (part === 'inside' && mark) setOpening(mark);
+    if (at === 'inside' && mark) {
+      // A pair's two leaves hang before one opening.
+      setOpening(mark.replace(/[LR]$/, ''));
+      return;
+    }
     const split = next.key !== 'inside' && ownAnswers(choices, next.key).length > 0;
     setScope(split || wantedScope !== 'kitchen' ? zone : 'kitchen');
     open(next.key);
@@ -207,12 +213,12 @@ function OneScheme({
     >
       <HatchDefinition />
       <RoomPanel
-        massing={room}
-        survey={survey}
+        walls={walls}
         edition={edition}
-        choices={choices}
         wall={wall}
         words={words}
+        room={null}
+        onWall={setWall}
         onPart={pickPart}
         tools={
           <>
@@ -266,11 +272,12 @@ function OneScheme({
         className="flex min-w-0 flex-wrap items-center gap-x-3 gap-y-1 rounded-frame border border-hairline bg-panel px-2 py-1 md:gap-x-5 md:px-4 lg:flex-nowrap"
       >
         <WallNavigation
-          massing={room}
-          survey={survey}
+          walls={walls}
+          edition={edition}
           wall={wall}
           part={decision.part}
           scope={scope}
+          opening={at === 'inside' ? opening : null}
           onWall={setWall}
           onPart={pickPart}
         />

@@ -2,29 +2,45 @@
 
 import { useState, type ReactNode } from 'react';
 import type { Edition } from '@/lib/engine/edition-types';
-import type { Choices, Massing, Survey, ZoneOrKitchen } from '@/lib/engine/types';
-import type { Part } from './decisions';
+import type { Elevation } from './elevation';
+import { WallDrawing, type PickPart } from './wall-drawing';
 
-export type PickPart = (part: Part, zone: ZoneOrKitchen, mark: string | null) => void;
+type View = 'room' | 'wall';
 
 /** The picture of the kitchen: room view or drawn wall, the scheme's tools above, what was found about it beneath. */
 export function RoomPanel({
+  walls,
+  edition,
+  wall,
   words,
+  room,
   tools,
   foot,
+  onWall,
+  onPart,
 }: {
-  massing: Massing;
-  survey: Survey;
+  walls: readonly Elevation[];
   edition: Edition;
-  choices: Choices;
   wall: string;
   /** The picture in words. */
   words: readonly string[];
+  /** The room in three dimensions; absent where it cannot be drawn. */
+  room: ReactNode | null;
+  onWall: (wall: string) => void;
   onPart: PickPart;
   tools: ReactNode;
   foot: ReactNode;
 }) {
-  const [view, setView] = useState<'room' | 'wall'>('room');
+  const [wanted, setView] = useState<View>('room');
+  const view = room === null ? 'wall' : wanted;
+  const shown = walls.find((one) => one.wall.id === wall) ?? walls[0];
+
+  function turn(by: -1 | 1) {
+    const index = walls.findIndex((one) => one === shown);
+    const next = walls[(index + by + walls.length) % walls.length];
+    if (next) onWall(next.wall.id);
+  }
+
   return (
     <section
       aria-label="Your kitchen"
@@ -32,17 +48,52 @@ export function RoomPanel({
     >
       <div className="flex min-w-0 items-center gap-x-1 border-b border-hairline px-1 md:gap-x-3 md:px-4">
         {tools}
-        <ViewSwitch view={view} onView={setView} />
+        {room !== null && <ViewSwitch view={view} onView={setView} />}
       </div>
-      <figure className="relative min-h-0 min-w-0">
+      <figure className="relative min-w-0">
+        {view === 'room' ? (
+          <div className="absolute inset-0">{room}</div>
+        ) : (
+          shown && (
+            <WallDrawing
+              elevation={shown}
+              edition={edition}
+              material
+              inked={null}
+              onPart={onPart}
+              className="absolute inset-0 size-full p-2 md:p-4"
+            />
+          )
+        )}
         <figcaption className="sr-only">{words.join(' ')}</figcaption>
+        {walls.length > 1 && shown && (
+          <div className="pointer-events-none absolute inset-x-1 top-1/2 flex -translate-y-1/2 justify-between">
+            <TurnButton by={-1} onTurn={turn} />
+            <TurnButton by={1} onTurn={turn} />
+          </div>
+        )}
       </figure>
       <div className="max-h-48 overflow-y-auto">{foot}</div>
     </section>
   );
 }
 
-function ViewSwitch({ view, onView }: { view: 'room' | 'wall'; onView: (view: 'room' | 'wall') => void }) {
+function TurnButton({ by, onTurn }: { by: -1 | 1; onTurn: (by: -1 | 1) => void }) {
+  return (
+    <button
+      type="button"
+      aria-label={by < 0 ? 'Turn to the wall on the left' : 'Turn to the wall on the right'}
+      onClick={() => onTurn(by)}
+      className="pointer-events-auto grid size-11 place-items-center rounded-frame text-quiet hover:text-ink"
+    >
+      <svg viewBox="0 0 20 32" className="h-8 w-5" aria-hidden="true" fill="none" stroke="currentColor">
+        <path d={by < 0 ? 'M15 3 L5 16 L15 29' : 'M5 3 L15 16 L5 29'} strokeWidth="2" />
+      </svg>
+    </button>
+  );
+}
+
+function ViewSwitch({ view, onView }: { view: View; onView: (view: View) => void }) {
   const other = view === 'room' ? 'wall' : 'room';
   return (
     <button
@@ -60,7 +111,7 @@ function ViewSwitch({ view, onView }: { view: 'room' | 'wall'; onView: (view: 'r
           <path d="M3 5 L9 8 V15 L3 20 M9 8 H21 M9 15 H21 M12 8 V15 M16.5 8 V15" strokeWidth="1.4" />
         )}
       </svg>
-      <span className="sr-only lg:not-sr-only">{other === 'wall' ? 'Wall drawing' : 'Room view'}</span>
+      <span className="sr-only lg:not-sr-only">{other === 'wall' ? 'Wall view' : 'Room view'}</span>
     </button>
   );
 }
