@@ -1,12 +1,14 @@
 import localFont from 'next/font/local';
 
 // The same files are embedded in the printed documents; their licences lie beside them. The loader reads its
-// arguments before any code runs, so each call spells out its ranges.
+// arguments before any code runs, so each call spells out its ranges. The fallback with adjusted metrics belongs to
+// the extended cut, which stands last.
 
 const title = localFont({
   src: '../fonts/bricolage-grotesque-latin-wght-normal.woff2',
   weight: '200 800',
   display: 'swap',
+  adjustFontFallback: false,
   variable: '--font-title',
   preload: true,
   declarations: [
@@ -37,6 +39,7 @@ const reading = localFont({
   src: '../fonts/atkinson-hyperlegible-next-latin-wght-normal.woff2',
   weight: '200 800',
   display: 'swap',
+  adjustFontFallback: false,
   variable: '--font-reading',
   preload: true,
   declarations: [
@@ -67,6 +70,7 @@ const mono = localFont({
   src: '../fonts/sometype-mono-latin-wght-normal.woff2',
   weight: '400 700',
   display: 'swap',
+  adjustFontFallback: false,
   variable: '--font-mono',
   preload: false,
   declarations: [

@@ -9,7 +9,7 @@ export default function RootPage() {
     <Frame className="mx-auto max-w-5xl">
       <main className="grid gap-frame">
         <h1 className="font-title text-page font-semibold">Stilewright</h1>
-        <EmptyState title="Your kitchen is at your contractor's address">
+        <EmptyState title="Your kitchen is at your contractor’s address">
           <p>
             Each contractor has an address of their own here. The mail with your invitation leads straight to
             your kitchen.

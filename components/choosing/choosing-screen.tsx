@@ -262,6 +262,7 @@ function OneScheme({
               contact={{ name: company.name, phone: company.phone }}
               onAgain={() => tell({ kind: 'online' })}
               onNoticed={() => tell({ kind: 'noticed' })}
+              onDrop={() => tell({ kind: 'drop' })}
             />
             <FitNotes notes={taken.notes} onWayOut={(label, changes) => act(label, changes)} />
           </>
@@ -441,11 +442,13 @@ function SchemeTroubles({
   contact,
   onAgain,
   onNoticed,
+  onDrop,
 }: {
   sync: ReturnType<typeof useScheme>['sync'];
   contact: { readonly name: string; readonly phone: string };
   onAgain: () => void;
   onNoticed: () => void;
+  onDrop: () => void;
 }) {
   if (sync.mismatch) {
     return (
@@ -456,6 +459,12 @@ function SchemeTroubles({
           again; if it stays so, please call.
         </p>
         <CallLine contact={contact} />
+        <div className="mt-2 flex flex-wrap gap-3">
+          <Button onClick={() => window.location.reload()}>Load again</Button>
+          <Button tone="quiet" onClick={onDrop}>
+            Leave my last change out
+          </Button>
+        </div>
       </Notice>
     );
   }

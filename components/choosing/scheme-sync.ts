@@ -68,7 +68,7 @@ export type SyncEvent =
   | { readonly kind: 'conflict'; readonly theirs: Stored }
   | { readonly kind: 'refused'; readonly sentence: string }
   | { readonly kind: 'mismatch'; readonly hereCents: number; readonly thereCents: number }
-  | { readonly kind: 'keepMine' | 'takeTheirs' }
+  | { readonly kind: 'keepMine' | 'takeTheirs' | 'drop' }
   | { readonly kind: 'refreshed'; readonly stored: Stored }
   | { readonly kind: 'noticed' }
   | { readonly kind: 'restored'; readonly base: Stored; readonly edits: readonly Edit[] };
@@ -129,6 +129,8 @@ export function advance(sync: Sync, event: SyncEvent): Sync {
       return sync.conflict ? { ...sync, stored: sync.conflict.theirs, conflict: null } : sync;
     case 'takeTheirs':
       return sync.conflict ? startSync(sync.conflict.theirs) : sync;
+    case 'drop':
+      return startSync(sync.stored);
     case 'refreshed':
       if (event.stored.version <= sync.stored.version) return sync;
       return unsent(sync).length === 0 ? startSync(event.stored) : meet(sync, event.stored);
