@@ -367,14 +367,20 @@ function OneScheme({
                     : null
               }
             />
-          ) : blocked ? (
-            <Button reason={null} disabled title={blocked.homeowner}>
-              Clear the fit note first
-            </Button>
           ) : (
-            <ButtonLink href={`${paths.review(slug, job.id)}?scheme=${scheme.id}`}>
-              Review and sign
-            </ButtonLink>
+            <ReviewLink
+              href={`${paths.review(slug, job.id)}?scheme=${scheme.id}`}
+              busy={waiting > 0}
+              reason={
+                sync.mismatch
+                  ? 'The two totals must agree first.'
+                  : blocked
+                    ? 'A fit note must be cleared first.'
+                    : sync.offline || sync.trouble
+                      ? 'As soon as your choices are sent.'
+                      : null
+              }
+            />
           )
         }
       />
@@ -401,6 +407,17 @@ function OneScheme({
         onPick={(one: Decision) => open(one.key)}
       />
     </div>
+  );
+}
+
+/** On to the agreement, once everything that is shown is also kept. */
+function ReviewLink({ href, busy, reason }: { href: string; busy: boolean; reason: string | null }) {
+  const words = 'Review and sign';
+  if (reason === null && !busy) return <ButtonLink href={href}>{words}</ButtonLink>;
+  return (
+    <Button disabled={busy} reason={reason}>
+      {words}
+    </Button>
   );
 }
 
@@ -501,8 +518,7 @@ function SchemeTroubles({
   if (sync.offline) {
     return (
       <Notice kind="caution" className="m-2">
-        No connection just now. You can go on choosing: it is kept on this device and sent when the connection
-        is back.
+        No connection just now. What you choose is kept on this device and sent when it is back.
       </Notice>
     );
   }

@@ -26,6 +26,7 @@ export function ConflictDialog({
     <Dialog
       open
       onOpenChange={() => undefined}
+      closable={false}
       title="Changed twice at once"
       about="This scheme was changed on another screen while yours was open. Which shall it be?"
       wide

@@ -73,7 +73,7 @@ export function RoomPanel({
           </div>
         )}
       </figure>
-      <div className="max-h-48 overflow-y-auto">{foot}</div>
+      <div className="max-h-80 overflow-y-auto">{foot}</div>
     </section>
   );
 }

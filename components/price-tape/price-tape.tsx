@@ -44,7 +44,7 @@ export function PriceTape({
   return (
     <section
       aria-label="Price"
-      className="sticky bottom-0 z-20 rounded-frame border border-case bg-case text-on-case dark:border-hairline"
+      className="sticky bottom-0 z-20 rounded-frame border border-case bg-case text-on-case [--hairline:#4a5751] [--ink-quiet:#b9c2ba] [--plaster:#2a3530] dark:border-hairline"
       onKeyDown={(event) => {
         if (event.key === 'Escape') setOpen(false);
       }}
@@ -88,7 +88,9 @@ export function PriceTape({
               )}
               {difference === 0 ? capital(words) : words}
             </span>
-            <span className="underline underline-offset-4">{open ? 'Roll up' : 'See why'}</span>
+            <span className="whitespace-nowrap underline underline-offset-4">
+              {open ? 'Roll up' : 'See why'}
+            </span>
           </button>
         </div>
         <div className="self-center lg:hidden">
@@ -105,6 +107,10 @@ export function PriceTape({
 
 const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
 
+/** Whether the blade's end or the hook would cut a numeral. */
+const cuts = (place: number, width: number, { end, hook }: Blade): boolean =>
+  [end, hook].some((at) => at > place && at < place + width);
+
 /** The steel itself; the figures beside it say the same, so it is hidden from those who listen. */
 function BladeDrawing({
   blade,
@@ -113,7 +119,7 @@ function BladeDrawing({
 }: {
   blade: Blade;
   baseline: Baseline;
-  /** The width of a numeral in per cent of the window: one that the blade's end would cut is left out. */
+  /** The width of a numeral in per cent of the window. */
   numeral: number;
 }) {
   const less = blade.end < blade.hook;
@@ -137,7 +143,7 @@ function BladeDrawing({
             />
           ))}
           {blade.ticks
-            .filter((tick) => tick.numeral && (tick.place + numeral < blade.end || tick.place > blade.end))
+            .filter((tick) => tick.numeral && !cuts(tick.place, numeral, blade))
             .map((tick) => (
               <text
                 key={tick.cents}

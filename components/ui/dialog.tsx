@@ -14,6 +14,7 @@ export function Dialog({
   title,
   about,
   wide = false,
+  closable = true,
   children,
   actions,
 }: {
@@ -23,6 +24,8 @@ export function Dialog({
   /** A sentence under the title; read out with it. */
   about?: ReactNode;
   wide?: boolean;
+  /** Without a close button: one of the actions must be taken. */
+  closable?: boolean;
   children?: ReactNode;
   /** Buttons at the foot, which stays in sight. */
   actions?: ReactNode;
@@ -43,14 +46,16 @@ export function Dialog({
               <Radix.Title className="font-title text-part font-semibold">{title}</Radix.Title>
               {about && <Radix.Description className="text-quiet">{about}</Radix.Description>}
             </div>
-            <Radix.Close
-              aria-label="Close"
-              className="grid size-11 shrink-0 place-items-center rounded-frame hover:bg-plaster"
-            >
-              <svg viewBox="0 0 20 20" className="size-5" aria-hidden="true">
-                <path d="M4 4 L16 16 M16 4 L4 16" stroke="currentColor" strokeWidth="2" fill="none" />
-              </svg>
-            </Radix.Close>
+            {closable && (
+              <Radix.Close
+                aria-label="Close"
+                className="grid size-11 shrink-0 place-items-center rounded-frame hover:bg-plaster"
+              >
+                <svg viewBox="0 0 20 20" className="size-5" aria-hidden="true">
+                  <path d="M4 4 L16 16 M16 4 L4 16" stroke="currentColor" strokeWidth="2" fill="none" />
+                </svg>
+              </Radix.Close>
+            )}
           </div>
           <div className="min-h-0 flex-1 overflow-y-auto px-3 py-3 md:px-5 md:py-5">{children}</div>
           {actions && (
