@@ -3,6 +3,7 @@
 import { RadioBlocks } from '@/components/ui/radio-blocks';
 import type { ZoneOrKitchen } from '@/lib/engine/types';
 import { PLACE_NAMES, type Decision } from './decisions';
+import { isTradeWord, TradeWord } from './trade-word';
 
 const SCOPE_NAMES: Readonly<Record<ZoneOrKitchen, string>> = {
   kitchen: 'Whole kitchen',
@@ -33,7 +34,11 @@ export function DecisionHead({
     <>
       <div className="min-w-0 flex-1 basis-40">
         <h1 className="font-title text-reading leading-6 font-semibold md:text-lead" aria-live="polite">
-          {decision.title}
+          {isTradeWord(decision.key) ? (
+            <TradeWord word={decision.key}>{decision.title}</TradeWord>
+          ) : (
+            decision.title
+          )}
           {place}
         </h1>
         <p className="text-note text-quiet">{status}</p>

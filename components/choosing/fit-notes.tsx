@@ -7,6 +7,7 @@ import { Dialog } from '@/components/ui/dialog';
 import { LengthText } from '@/components/ui/length';
 import { formatCents } from '@/lib/engine/money';
 import type { ChoiceChange, FitNote, Severity } from '@/lib/engine/types';
+import { TradeWord } from './trade-word';
 
 const ORDER: readonly Severity[] = ['cannotBeBuilt', 'addsWork', 'information'];
 const NAMES: Readonly<Record<Severity, string>> = {
@@ -70,6 +71,11 @@ export function FitNotes({ notes, onWayOut }: { notes: readonly FitNote[]; onWay
               <p>
                 <LengthText text={note.homeowner} />
               </p>
+              {note.code === 'crown.filler' && (
+                <p className="text-note">
+                  <TradeWord word="fillerStrip">What a filler strip is</TradeWord>
+                </p>
+              )}
               {note.parts.length > 0 && (
                 <p className="mt-1 font-mono text-note text-quiet">{note.parts.join('  ')}</p>
               )}
