@@ -1,6 +1,9 @@
+import { ClerkProvider } from '@clerk/nextjs';
 import type { Metadata, Viewport } from 'next';
+import { headers } from 'next/headers';
 import type { ReactNode } from 'react';
 import { ReadyMarker } from '@/components/ui/ready-marker';
+import { readSignInSettings } from '@/lib/services/session/sign-in-settings';
 import { fontVariables } from './fonts';
 import './globals.css';
 
@@ -15,11 +18,23 @@ export const viewport: Viewport = {
   ],
 };
 
-export default function RootLayout({ children }: { children: ReactNode }) {
+export default async function RootLayout({ children }: { children: ReactNode }) {
+  // Read first: it makes every page one of its request, which the policy's nonce and the settings below need.
+  const nonce = (await headers()).get('x-nonce') ?? undefined;
+  const { publishableKey, proxyPath } = readSignInSettings();
   return (
     <html lang="en" className={fontVariables} suppressHydrationWarning>
       <body>
-        {children}
+        <ClerkProvider
+          dynamic
+          nonce={nonce}
+          publishableKey={publishableKey}
+          {...(proxyPath === null ? {} : { proxyUrl: proxyPath })}
+          prefetchUI={false}
+          telemetry={{ disabled: true }}
+        >
+          {children}
+        </ClerkProvider>
         <ReadyMarker />
       </body>
     </html>
