@@ -1,9 +1,10 @@
 import { randomUUID } from 'node:crypto';
-import { auth } from '@clerk/nextjs/server';
 import type { Actor } from '@/lib/contracts/actor';
 import { FAULT_STATUS, type Fault, type Result } from '@/lib/contracts/result';
+import type { SignedIn } from '@/lib/contracts/sign-in';
 import { isOwnOrigin } from '@/lib/services/session/is-own-origin';
 import { resolveActor } from '@/lib/services/session/resolve-actor';
+import { findSignedIn, findSignedInUserId } from '@/lib/services/session/signed-in';
 
 const HEADERS = { 'cache-control': 'private, no-store' } as const;
 const BODY_BYTES_MAX = 1_000_000;
@@ -38,16 +39,17 @@ async function readBody(request: Request): Promise<Result<unknown>> {
 }
 
 /** Does `work` for whoever is signed in; what nobody foresaw is logged under a number that the answer names. */
-async function guarded(
+async function guarded<Who>(
   request: Request,
-  work: (clerkUserId: string, body: unknown) => Promise<Result<unknown>>,
+  find: () => Promise<Who | null>,
+  work: (who: Who, body: unknown) => Promise<Result<unknown>>,
 ): Promise<Response> {
   try {
-    const { userId } = await auth();
-    if (!userId) return respond({ ok: false, fault: SIGNED_OUT });
+    const who = await find();
+    if (who === null) return respond({ ok: false, fault: SIGNED_OUT });
     const body = await readBody(request);
     if (!body.ok) return respond(body);
-    return respond(await work(userId, body.value));
+    return respond(await work(who, body.value));
   } catch (error) {
     const number = randomUUID().slice(0, 8);
     console.error(`error ${number} at ${request.method} ${new URL(request.url).pathname}:`, error);
@@ -66,7 +68,7 @@ export function answer(
   params: Promise<{ readonly company: string; readonly job?: string }>,
   work: (actor: Actor, body: unknown) => Promise<Result<unknown>>,
 ): Promise<Response> {
-  return guarded(request, async (clerkUserId, body) => {
+  return guarded(request, findSignedInUserId, async (clerkUserId, body) => {
     const { company, job } = await params;
     const actor = await resolveActor({ slug: company, clerkUserId, jobId: job });
     return actor ? work(actor, body) : { ok: false, fault: NOT_HERE };
@@ -76,7 +78,7 @@ export function answer(
 /** As {@link answer}, for somebody who is signed in but may be nobody here yet. */
 export function answerVisitor(
   request: Request,
-  work: (clerkUserId: string, body: unknown) => Promise<Result<unknown>>,
+  work: (visitor: SignedIn, body: unknown) => Promise<Result<unknown>>,
 ): Promise<Response> {
-  return guarded(request, work);
+  return guarded(request, findSignedIn, work);
 }

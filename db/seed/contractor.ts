@@ -6,7 +6,7 @@ import { findCompanyBySlug } from '@/lib/services/company/find-by-slug';
 import { findMember } from '@/lib/services/person/find-member';
 import { syncClerkEvent } from '@/lib/services/person/sync-clerk-event';
 import type { Staff } from './demo';
-import { ensureMembership, ensureOrganization, ensureUser } from '@/lib/adapters/clerk-directory';
+import { ensureMembership, ensureOrganization, ensureUser } from './sign-in';
 
 /** The value, or an error that says what was refused. */
 export function done<T>(result: Result<T>): T {

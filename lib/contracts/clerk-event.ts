@@ -25,4 +25,12 @@ export type ClerkEvent =
       readonly organizationId: string;
       readonly userId: string;
     }
+  /** Its role is one that this program does not know: nothing is open until it has another. */
+  | {
+      readonly id: string;
+      readonly type: 'membershipShut';
+      readonly membershipId: string;
+      readonly organizationId: string;
+      readonly userId: string;
+    }
   | { readonly id: string; readonly type: 'other'; readonly name: string };

@@ -15,7 +15,13 @@ interface Address {
 const visitor = vi.hoisted(() => ({ id: 'user_mara', emailAddresses: [] as Address[] }));
 vi.mock('@clerk/nextjs/server', () => ({
   auth: () => Promise.resolve({ userId: visitor.id }),
-  currentUser: () => Promise.resolve({ ...visitor, firstName: 'Mara', lastName: null }),
+  clerkClient: () =>
+    Promise.resolve({
+      users: {
+        getUser: () =>
+          Promise.resolve({ ...visitor, firstName: 'Mara', lastName: null, primaryEmailAddressId: null }),
+      },
+    }),
 }));
 
 let database: TestDatabase;
@@ -48,10 +54,12 @@ describe('the acceptance of an invitation', () => {
     const { token } = valueOf(await issueInvitation(tern.owner, { jobId: lane.jobId, email, name: 'Mara' }));
     const whoIs = () => resolveActor({ slug: 'tern-hollow', clerkUserId: visitor.id, jobId: lane.jobId });
     for (const verification of [null, { status: 'unverified' }, { status: 'expired' }]) {
+      visitor.id = `user_${verification?.status}`;
       visitor.emailAddresses = [{ emailAddress: email, verification }];
       expect((await accept(token)).status).toBe(403);
       expect(await whoIs()).toBeNull();
     }
+    visitor.id = 'user_mara';
     visitor.emailAddresses = [
       { emailAddress: 'other@winslade.example', verification: { status: 'unverified' } },
       { emailAddress: email, verification: { status: 'verified' } },

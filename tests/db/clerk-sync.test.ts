@@ -107,6 +107,15 @@ describe('memberships', () => {
     expect(await whoIs('user_late')).toBeNull();
   });
 
+  it('with a role that nobody knows shut the desk until they have another', async () => {
+    const event = joining('ash');
+    await syncClerkEvent(event);
+    await syncClerkEvent({ ...leaving(event), type: 'membershipShut' });
+    expect(await whoIs('user_ash')).toBeNull();
+    await syncClerkEvent({ ...event, id: eventId() });
+    expect(await whoIs('user_ash')).toMatchObject({ kind: 'member' });
+  });
+
   it('take up the person who has the address already', async () => {
     await syncClerkEvent(joining('nobody', { userId: 'user_other', email: lane.guest.email.toUpperCase() }));
     const rows = await withScope(tern.worker, (tx) =>

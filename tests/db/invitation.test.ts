@@ -6,8 +6,9 @@ import { closePool, withScope } from '@/db/client';
 import { guests, invitations, people } from '@/db/schema';
 import { sha256 } from '@/lib/adapters/ids';
 import { mailJobShape, type MailJob } from '@/lib/contracts/jobs';
+import type { SignedIn } from '@/lib/contracts/sign-in';
 import { cloneTestDatabase, type TestDatabase } from '@/lib/local/test-database';
-import { acceptInvitation, type Visitor } from '@/lib/services/invitation/accept';
+import { acceptInvitation } from '@/lib/services/invitation/accept';
 import { listInvitations } from '@/lib/services/invitation/list';
 import { readInvitation } from '@/lib/services/invitation/read';
 import { revokeInvitation } from '@/lib/services/invitation/revoke';
@@ -45,8 +46,8 @@ afterAll(async () => {
 });
 
 let counted = 0;
-const visitor = (email: string, clerkUserId = `user_${email}`): Visitor => ({
-  clerkUserId,
+const visitor = (email: string, userId = `user_${email}`): SignedIn => ({
+  userId,
   name: '',
   verifiedEmails: [email],
 });
@@ -119,7 +120,7 @@ describe('an invitation', () => {
       const refused = await acceptInvitation(stranger, link);
       expect(codeOf(refused)).toBe('notAllowed');
       expect(
-        await resolveActor({ slug: 'tern-hollow', clerkUserId: stranger.clerkUserId, jobId: lane.jobId }),
+        await resolveActor({ slug: 'tern-hollow', clerkUserId: stranger.userId, jobId: lane.jobId }),
       ).toBeNull();
     }
     const mara = visitor(email.toUpperCase(), `user_${email}`);
@@ -128,7 +129,7 @@ describe('an invitation', () => {
       company: 'tern-hollow',
     });
     expect(
-      await resolveActor({ slug: 'tern-hollow', clerkUserId: mara.clerkUserId, jobId: lane.jobId }),
+      await resolveActor({ slug: 'tern-hollow', clerkUserId: mara.userId, jobId: lane.jobId }),
     ).toMatchObject({ kind: 'guest', role: 'homeowner', signer: true, name: 'Mara Winslade', email });
     expect(valueOf(await readInvitation(link)).state).toBe('accepted');
   });
@@ -156,7 +157,7 @@ describe('an invitation', () => {
     valueOf(await acceptInvitation(mara, link));
     const actor = await resolveActor({
       slug: 'tern-hollow',
-      clerkUserId: mara.clerkUserId,
+      clerkUserId: mara.userId,
       jobId: lane.jobId,
     });
     await withScope(tern.worker, (tx) =>
@@ -167,7 +168,7 @@ describe('an invitation', () => {
     );
     expect(codeOf(await acceptInvitation(mara, link))).toBe('conflict');
     expect(
-      await resolveActor({ slug: 'tern-hollow', clerkUserId: mara.clerkUserId, jobId: lane.jobId }),
+      await resolveActor({ slug: 'tern-hollow', clerkUserId: mara.userId, jobId: lane.jobId }),
     ).toBeNull();
   });
 

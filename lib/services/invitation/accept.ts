@@ -6,19 +6,11 @@ import { sha256 } from '@/lib/adapters/ids';
 import type { Guest, Worker } from '@/lib/contracts/actor';
 import { tokenShape, type Acceptance } from '@/lib/contracts/invitation';
 import { ok, refuse, type Result } from '@/lib/contracts/result';
+import type { SignedIn } from '@/lib/contracts/sign-in';
 import { writeAudit } from '../audit/write';
 import { findCompanyBySlug } from '../company/find-by-slug';
 import { savePerson } from '../person/save';
 import { invitationState } from './state';
-
-/** Somebody who is signed in, as the sign-in service knows them. */
-export interface Visitor {
-  readonly clerkUserId: string;
-  /** Empty when the sign-in service knows none. */
-  readonly name: string;
-  /** Addresses that they have shown to be theirs, and no others. */
-  readonly verifiedEmails: readonly string[];
-}
 
 const NONE = 'This invitation cannot be found. Please open the newest mail from your contractor.';
 
@@ -27,7 +19,7 @@ const NONE = 'This invitation cannot be found. Please open the newest mail from 
  * again, also twice at the same moment, answers the same and changes nothing.
  */
 export async function acceptInvitation(
-  visitor: Visitor,
+  visitor: SignedIn,
   { slug, token }: { readonly slug: string; readonly token: string },
 ): Promise<Result<Acceptance>> {
   const company = await findCompanyBySlug(slug);
@@ -55,7 +47,7 @@ export async function acceptInvitation(
     if (state === 'revoked') return refuse('conflict', `This invitation was taken back. ${again}`);
 
     const personId = await savePerson(tx, companyId, {
-      userId: visitor.clerkUserId,
+      userId: visitor.userId,
       email: row.email,
       name: visitor.name.trim() || row.name,
     });

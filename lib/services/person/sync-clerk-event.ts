@@ -19,6 +19,7 @@ export async function syncClerkEvent(event: ClerkEvent): Promise<Synced> {
     case 'userDeleted':
       return syncUser(event);
     case 'membershipSaved':
+    case 'membershipShut':
     case 'membershipDeleted':
       return syncMembership(event);
     case 'other':
@@ -84,7 +85,10 @@ async function savedChanges(
   return other ? { name: event.name } : { name: event.name, email };
 }
 
-type MembershipEvent = Extract<ClerkEvent, { type: 'membershipSaved' | 'membershipDeleted' }>;
+type MembershipEvent = Extract<
+  ClerkEvent,
+  { type: 'membershipSaved' | 'membershipShut' | 'membershipDeleted' }
+>;
 
 async function syncMembership(event: MembershipEvent): Promise<Synced> {
   const company = await withScope({ kind: 'organization', key: event.organizationId }, async (tx) => {
@@ -99,8 +103,9 @@ async function syncMembership(event: MembershipEvent): Promise<Synced> {
   return withScope(worker, async (tx) => {
     if (!(await takeEvent(tx, event, company.id))) return 'duplicate';
     const ended = { id: `ended/${event.membershipId}`, type: 'membershipEnded' };
-    if (event.type === 'membershipDeleted') {
-      await takeEvent(tx, ended, company.id);
+    if (event.type !== 'membershipSaved') {
+      // What is deleted stays so, even when word of its beginning comes later.
+      if (event.type === 'membershipDeleted') await takeEvent(tx, ended, company.id);
       const gone = await tx
         .update(members)
         .set({ active: false })
