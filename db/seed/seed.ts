@@ -1,0 +1,43 @@
+import { closePool } from '@/db/client';
+import { ensureContractor } from './contractor';
+import { HOMEOWNERS, JOBS, QUILLBACK, STAFF, TERN_HOLLOW } from './demo';
+import { ensureInvited, ensureJob } from './job';
+
+/** The staff's password in the demo, which stands on one machine alone. */
+const PASSWORD = 'veneer-and-stile-1974';
+
+/**
+ * Puts the demo in, by the same services that people use, as far as it is not there yet. Answers a line for each
+ * who can sign in, and last what was done.
+ */
+async function seed(): Promise<string[]> {
+  const [ines, rowan] = await ensureContractor(TERN_HOLLOW, [STAFF.ines, STAFF.rowan], PASSWORD);
+  const [dov] = await ensureContractor(QUILLBACK, [STAFF.dov], PASSWORD);
+  if (!ines || !rowan || !dov) throw new Error('The staff is not complete.');
+
+  await ensureJob(rowan, JOBS.millRace);
+  await ensureJob(rowan, JOBS.gannetCourt);
+  const lane = await ensureJob(rowan, JOBS.sorrelLane);
+  await ensureInvited(rowan, lane.id, HOMEOWNERS.mara);
+  await ensureInvited(rowan, lane.id, HOMEOWNERS.teo);
+  const row = await ensureJob(dov, JOBS.thistleRow);
+  await ensureInvited(dov, row.id, HOMEOWNERS.petra);
+
+  return [
+    ...Object.values(STAFF).map(
+      ({ name, email, role }) => `  ${name}, ${role}: ${email}, password ${PASSWORD}`,
+    ),
+    ...[HOMEOWNERS.mara, HOMEOWNERS.teo].map(
+      ({ name, email }) => `  ${name}, homeowner: ${email}, by the invitation in the mailbox`,
+    ),
+    '2 contractors, 4 jobs',
+  ];
+}
+
+seed()
+  .then((lines) => console.log(lines.join('\n')))
+  .catch((error: unknown) => {
+    console.error(error);
+    process.exitCode = 1;
+  })
+  .finally(() => closePool());
