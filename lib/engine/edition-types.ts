@@ -29,6 +29,9 @@ export interface DoorStyle extends OptionBase {
   readonly thickness: Sixtyfourths;
   readonly panelThickness: Sixtyfourths;
   readonly groove: Sixtyfourths;
+  /** Its panel is solid wood and moves with the season (O7); both grooves together leave it `panelPlay` to grow. */
+  readonly solidPanel?: boolean;
+  readonly panelPlay?: Sixtyfourths;
   /** Section of the inner (sticking) edge and of the outer edge, for drawing and the 3D template. */
   readonly innerEdge: readonly ProfilePoint[];
   readonly outerEdge: readonly ProfilePoint[];
@@ -45,6 +48,8 @@ export interface DoorStyle extends OptionBase {
   /** Per square foot, before species and finish factors; slab fronts at `slabPrice`. */
   readonly price: Cents;
   readonly slabPrice: Cents;
+  /** Added for each front ordered without its panel and finished inside. */
+  readonly glassPrice?: Cents;
   /** Option ids that go with it; absent means all. */
   readonly overlays?: readonly string[];
   readonly species?: readonly string[];
@@ -105,6 +110,8 @@ export interface HingeSet extends OptionBase {
   readonly byWeight: readonly { readonly upTo: number; readonly hinges: number }[];
   readonly extraAboveWidth?: { readonly width: Sixtyfourths; readonly hinges: number };
   readonly price: Cents;
+  /** What joins the two leaves of a folding corner (H2). */
+  readonly fold?: { readonly name: string; readonly hinges: number; readonly price: Cents };
 }
 
 export interface MouldingProfile extends OptionBase {
@@ -162,6 +169,22 @@ export interface EndTreatment extends OptionBase {
   readonly kind: 'flat' | 'panelled';
   /** Per square foot. */
   readonly price: Cents;
+  /** Glued on like veneer, so that its area takes adhesive (V3). */
+  readonly bonded?: boolean;
+  /** Of a panelled end: stiles and rails, and the widest panel between them (P3). */
+  readonly stile?: Sixtyfourths;
+  readonly rail?: Sixtyfourths;
+  readonly widestPanel?: Sixtyfourths;
+}
+
+/** A new box with its frame, where a cabinet is replaced or added (S4). */
+export interface NewCabinet {
+  readonly tier: 'base' | 'wall' | 'tall';
+  readonly each: Cents;
+  /** Per foot of width. */
+  readonly foot: Cents;
+  /** Hundredths of an hour each. */
+  readonly hours: number;
 }
 
 export interface Counter extends OptionBase {
@@ -171,6 +194,8 @@ export interface Counter extends OptionBase {
   readonly pricePerSquareFoot: Cents;
   readonly pricePerEdgeFoot: Cents;
   readonly pricePerCutOut: Cents;
+  /** Per foot of splash against a wall. */
+  readonly pricePerSplashFoot?: Cents;
   readonly allowance: Cents;
   readonly leadTimeDays?: number;
 }
@@ -179,7 +204,18 @@ export interface Counter extends OptionBase {
 export interface LabourRate {
   readonly code: string;
   readonly label: string;
-  readonly per: 'front' | 'hinge' | 'veneerArea' | 'mouldingFoot' | 'fillerStrip' | 'panel' | 'box' | 'job';
+  readonly per:
+    | 'front'
+    | 'hinge'
+    | 'veneerArea'
+    | 'mouldingFoot'
+    | 'nailerFoot'
+    | 'fillerStrip'
+    | 'panel'
+    | 'box'
+    | 'removal'
+    | 'newCabinet'
+    | 'job';
   readonly unit: Unit;
   readonly class: LineClass;
   /** Hundredths of an hour each; install days come from their sum (T1). */
@@ -208,6 +244,7 @@ export interface Edition {
   readonly ends: readonly EndTreatment[];
   readonly counters: readonly Counter[];
   readonly labour: readonly LabourRate[];
+  readonly newCabinets: readonly NewCabinet[];
   /** Keys that may differ by zone; the rest are chosen for the whole kitchen. */
   readonly zonedKeys: readonly ChoiceKey[];
   readonly shop: ShopSettings;
@@ -240,8 +277,21 @@ export interface ShopSettings {
   readonly kerf: Sixtyfourths;
   readonly stockLengths: readonly Sixtyfourths[];
   readonly sheet: { readonly width: Sixtyfourths; readonly height: Sixtyfourths };
+  /** Square feet of one face that a gallon covers (V3). */
   readonly adhesiveCoverage: number;
+  /** Hours that one of the crew works in a day (T1). */
   readonly crewHoursPerDay: number;
+  /** Thickness of a box's back panel (B2). */
+  readonly boxBack: Sixtyfourths;
+  /** Thickness of drawer-box parts (B4). */
+  readonly boxThickness: Sixtyfourths;
+  readonly pullOutHeight: Sixtyfourths;
+  /** Pounds that a cubic foot of drawer may come to hold (B2). */
+  readonly loadPerCubicFoot: number;
+  /** Moisture content in percent between which a solid panel lives (O7). */
+  readonly moisture: { readonly from: number; readonly to: number };
+  /** Added to each moulding piece for the saw (C6). */
+  readonly endAllowance: Sixtyfourths;
 }
 
 /** What an edition costs the contractor; never leaves the server for a homeowner. Keys are option and labour ids. */

@@ -37,14 +37,7 @@ export interface Wall {
 }
 
 export type OpeningKind =
-  | 'door'
-  | 'pair'
-  | 'drawer'
-  | 'falseFront'
-  | 'tiltOut'
-  | 'appliancePanel'
-  | 'open'
-  | 'cornerFold';
+  'door' | 'pair' | 'drawer' | 'falseFront' | 'tiltOut' | 'appliancePanel' | 'open' | 'cornerFold';
 
 /** One opening of a face frame; its mark is `<cabinet>-<n>`, such as `N-03-2` (rule A1). */
 export interface Opening {
@@ -127,17 +120,14 @@ export interface Cabinet {
   readonly joinedRight?: boolean;
   /** How far the frame's face stands out of its neighbours' plane. */
   readonly outOfPlane?: Sixtyfourths;
+  /** How far the frame reaches past the box's sides, behind which end panels and spacers are packed out (P1, B3). */
+  readonly overhang?: Sixtyfourths;
+  /** A light fixture under it, and the lip that hides part of it now (C4). */
+  readonly underLight?: { readonly height: Sixtyfourths; readonly lip: Sixtyfourths };
 }
 
 export type ApplianceKind =
-  | 'range'
-  | 'cooktop'
-  | 'refrigerator'
-  | 'dishwasher'
-  | 'sink'
-  | 'hood'
-  | 'microwave'
-  | 'wallOven';
+  'range' | 'cooktop' | 'refrigerator' | 'dishwasher' | 'sink' | 'hood' | 'microwave' | 'wallOven';
 
 export interface Appliance {
   readonly id: string;
@@ -150,6 +140,10 @@ export interface Appliance {
   readonly depth: Sixtyfourths;
   /** Sits inside a cabinet (a sink, a cooktop) and takes no wall length. */
   readonly within?: string;
+  /** How far its handle stands out of its front (O6). */
+  readonly handle?: Sixtyfourths;
+  /** Height of the door at its toe, which a base moulding must leave free (C5). */
+  readonly toeDoor?: Sixtyfourths;
 }
 
 /** A window or a doorway in a wall. */
@@ -313,9 +307,12 @@ export interface Front {
   readonly width: Sixtyfourths;
   readonly height: Sixtyfourths;
   readonly hinge: 'left' | 'right' | 'none';
+  /** Hinges on the frame; of a folding corner's second leaf, those of the joint (H2). */
   readonly hinges: number;
   readonly glass: boolean;
-  /** Hundredths of a square foot, after the style's minimum. */
+  /** After the style's minimum, exact, in 1/25 of a square 64th: 147,456 to 0.01 ft² (O5). */
+  readonly area: number;
+  /** The same in hundredths of a square foot, half up, for reading; a price line rounds once, over its sum. */
   readonly billedArea: number;
   /** Thousandths of a pound. */
   readonly weight: number;
@@ -329,7 +326,7 @@ export interface FillerStrip {
   readonly zone: Zone;
   readonly width: Sixtyfourths;
   readonly height: Sixtyfourths;
-  readonly reason: 'crown' | 'valance';
+  readonly reason: 'crown' | 'valance' | 'base';
 }
 
 export interface VeneerStrip {
@@ -375,6 +372,15 @@ export interface PanelPiece {
   readonly width: Sixtyfourths;
   readonly height: Sixtyfourths;
   readonly notch?: { readonly width: Sixtyfourths; readonly height: Sixtyfourths };
+  /** Standing sticks behind it, as thick as the frame's overhang (P1). */
+  readonly sticks?: { readonly count: number; readonly thickness: Sixtyfourths };
+  /** Of a panelled end or wrap: equal panels between stiles (P3). */
+  readonly layout?: {
+    readonly panels: number;
+    readonly panelWidth: Sixtyfourths;
+    readonly stile: Sixtyfourths;
+    readonly rail: Sixtyfourths;
+  };
   readonly species: string;
   readonly finish: string;
 }
@@ -389,6 +395,31 @@ export interface DrawerBox {
   readonly height: Sixtyfourths;
   readonly length: Sixtyfourths;
   readonly slide: string;
+  /** Packed out behind a frame and past a hinge (B3). */
+  readonly spacers?: { readonly left: Sixtyfourths; readonly right: Sixtyfourths };
+  /** Cut pieces, butt-jointed, and the edge band of the four top edges (B4). */
+  readonly parts: readonly BoxPart[];
+  readonly edgeBand: Sixtyfourths;
+}
+
+export interface BoxPart {
+  readonly name: 'side' | 'front' | 'back' | 'bottom';
+  readonly count: number;
+  readonly width: Sixtyfourths;
+  readonly length: Sixtyfourths;
+}
+
+/** One straight piece of counter over a run, islands with their whole top (M10). */
+export interface CounterPiece {
+  readonly mark: string;
+  readonly zone: Zone;
+  readonly length: Sixtyfourths;
+  readonly depth: Sixtyfourths;
+  /** Front and exposed edges. */
+  readonly edge: Sixtyfourths;
+  /** Length of splash against the wall; 0 when free-standing. */
+  readonly splash: Sixtyfourths;
+  readonly cutOuts: number;
 }
 
 export interface HardwareCount {
@@ -402,6 +433,10 @@ export interface HardwareCount {
 export interface Schedule {
   readonly readyBusinessDays: number;
   readonly installDays: number;
+  /** Days without counter, sink and kitchen: the counter's own lead time after the boxes are in (T0). */
+  readonly withoutCounterDays: number;
+  /** Hundredths of an hour. */
+  readonly labourHours: number;
   readonly because: string;
 }
 
@@ -412,7 +447,10 @@ export interface Takeoff {
   readonly mouldings: readonly MouldingPiece[];
   readonly panels: readonly PanelPiece[];
   readonly boxes: readonly DrawerBox[];
+  readonly counters: readonly CounterPiece[];
   readonly hardware: readonly HardwareCount[];
+  /** Face covered by veneer and panels glued the same way, 0.01 ft², and adhesive for both faces, 0.01 gallon (V3). */
+  readonly bonded: { readonly area: number; readonly gallons: number };
   readonly notes: readonly FitNote[];
   readonly lines: readonly PriceLine[];
   readonly subtotal: Cents;
@@ -474,6 +512,7 @@ export interface MassingSolid extends Solid {
     | 'toe'
     | 'counter'
     | 'splash'
+    | 'filler'
     | 'appliance'
     | 'window'
     | 'doorway'
