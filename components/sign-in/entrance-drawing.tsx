@@ -6,19 +6,15 @@ const FRAME = 1.5;
 const STILE = 2.25;
 const u = (inches: number) => inches * 8;
 
-/** A front with stiles, rails and a flat panel: outer edge, inner edge and the mitre-free joints. */
+/** A front with stiles, rails and a flat panel: outer edge, inner edge, and the joints where rails meet stiles. */
 function Front({ x, y, width, height, brand }: Rect & { brand?: boolean }) {
   const inner = { x: x + STILE, y: y + STILE, width: width - 2 * STILE, height: height - 2 * STILE };
   return (
     <g className={brand ? 'text-brand' : 'text-ink'} strokeWidth={brand ? 2.25 : 1.25}>
       <rect x={u(x)} y={u(y)} width={u(width)} height={u(height)} />
       <rect x={u(inner.x)} y={u(inner.y)} width={u(inner.width)} height={u(inner.height)} />
-      {[y + STILE, y + height - STILE].map((at) => (
-        <path
-          key={at}
-          d={`M${u(x + STILE)} ${u(at)} H${u(x + width - STILE)}`}
-          strokeWidth={brand ? 2.25 : 1.25}
-        />
+      {[x + STILE, x + width - STILE].map((at) => (
+        <path key={at} d={`M${u(at)} ${u(y)} v${u(STILE)} M${u(at)} ${u(y + height)} v${-u(STILE)}`} />
       ))}
     </g>
   );
@@ -80,7 +76,7 @@ export function EntranceDrawing({ className }: { className?: string }) {
   const doorHeight = HEIGHT - doorTop - FRAME;
   return (
     <svg
-      viewBox={`${u(-5)} ${u(-5)} ${u(WIDTH + 7)} ${u(HEIGHT + 8)}`}
+      viewBox={`${u(-5)} ${u(-5)} ${u(WIDTH + 6.5)} ${u(HEIGHT + 10.5)}`}
       className={className}
       fill="none"
       stroke="currentColor"
@@ -111,7 +107,7 @@ export function EntranceDrawing({ className }: { className?: string }) {
       })}
       <Dimension x1={0} y1={-2} x2={WIDTH} y2={-2} text="33" />
       <Dimension x1={-2} y1={0} x2={-2} y2={HEIGHT} text="34 1/2" />
-      <Dimension x1={FRAME * 2 + leaf} y1={HEIGHT + 4} x2={WIDTH - FRAME} y2={HEIGHT + 4} text="14 1/4" />
+      <Dimension x1={FRAME * 2 + leaf} y1={HEIGHT + 4.5} x2={WIDTH - FRAME} y2={HEIGHT + 4.5} text="14 1/4" />
     </svg>
   );
 }

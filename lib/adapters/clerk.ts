@@ -2,7 +2,7 @@ import { auth, clerkClient } from '@clerk/nextjs/server';
 import { verifyWebhook } from '@clerk/nextjs/webhooks';
 import { NextRequest } from 'next/server';
 import type { ClerkEvent } from '@/lib/contracts/clerk-event';
-import type { SignedIn, SignInSettings, SignInUser } from '@/lib/contracts/sign-in';
+import { splitName, type SignedIn, type SignInSettings, type SignInUser } from '@/lib/contracts/sign-in';
 import { environment } from './environment';
 
 /** Why the sign-in service did not do what was asked. */
@@ -42,13 +42,6 @@ async function ask<T>(work: (client: Client) => Promise<T>): Promise<T> {
 
 const nameOf = (user: Pick<User, 'firstName' | 'lastName'>) =>
   [user.firstName, user.lastName].filter(Boolean).join(' ');
-
-/** The last word is the family name; a single word is the first name. */
-function splitName(name: string): { firstName: string; lastName?: string } {
-  const words = name.trim().split(/\s+/);
-  const lastName = words.length > 1 ? words.pop() : undefined;
-  return { firstName: words.join(' '), lastName };
-}
 
 const KEPT_MS = 15_000;
 const KEPT_MAX = 1000;

@@ -20,3 +20,10 @@ export interface SignInSettings {
   /** Path on this origin through which sign-in traffic goes; null when it goes to the service itself. */
   readonly proxyPath: string | null;
 }
+
+/** First and family name of a full one: the last word is the family name; a single word is the first name. */
+export function splitName(name: string): { firstName: string; lastName?: string } {
+  const words = name.trim().split(/\s+/);
+  const lastName = words.length > 1 ? words.pop() : undefined;
+  return { firstName: words.join(' '), lastName };
+}
