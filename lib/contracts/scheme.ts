@@ -1,55 +1,13 @@
 import { z } from 'zod';
 import type { Edition, Terms } from '@/lib/engine/edition-types';
-import type { ChoiceChange, ChoiceKey, Choices, Survey, ZoneOrKitchen } from '@/lib/engine/types';
+import type { Choices, Survey } from '@/lib/engine/types';
 import type { CompanyBrand } from './brand';
 import type { Role } from './actor';
+import { choiceChangeShape, choicesShape } from './choices';
 import type { OwnJob } from './job';
 import { jobReferenceShape } from './job';
 
-const CHOICE_KEYS = [
-  'style',
-  'species',
-  'finish',
-  'overlay',
-  'pull',
-  'crown',
-  'base',
-  'lightRail',
-  'ends',
-  'drawerBox',
-  'counter',
-] as const satisfies readonly ChoiceKey[];
-const ZONES = ['kitchen', 'wall', 'base', 'island', 'tall'] as const satisfies readonly ZoneOrKitchen[];
-
-const optionId = z.string().min(1).max(80);
-const partMark = z.string().min(1).max(40);
-
-export const choiceChangeShape: z.ZodType<ChoiceChange> = z.union([
-  z.strictObject({ key: z.enum(CHOICE_KEYS), zone: z.enum(ZONES), option: optionId }),
-  z.strictObject({ inside: partMark, option: optionId.nullable() }),
-]);
-
-const zoneChoicesShape = z.strictObject({
-  style: optionId,
-  species: optionId,
-  finish: optionId,
-  overlay: optionId,
-  pull: optionId,
-  crown: optionId,
-  base: optionId,
-  lightRail: optionId,
-  ends: optionId,
-  drawerBox: optionId,
-  counter: optionId,
-});
-
-/** A whole set of choices. */
-export const choicesShape: z.ZodType<Choices> = z.strictObject({
-  version: z.literal(1),
-  kitchen: zoneChoicesShape,
-  zones: z.partialRecord(z.enum(['wall', 'base', 'island', 'tall']), zoneChoicesShape.partial()),
-  inside: z.record(partMark, optionId),
-});
+export { choiceChangeShape, choicesShape };
 
 export const SCHEME_LETTERS = ['A', 'B', 'C', 'D', 'E', 'F'] as const;
 export type SchemeLetter = (typeof SCHEME_LETTERS)[number];
