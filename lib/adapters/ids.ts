@@ -1,4 +1,5 @@
 import { createHash, randomBytes, randomUUID } from 'node:crypto';
+import canonicalize from 'canonicalize';
 
 /** A fresh row id. */
 export const newId = (): string => randomUUID();
@@ -10,4 +11,11 @@ export const sha256 = (text: string): string => createHash('sha256').update(text
 export function newToken(): { token: string; hash: string } {
   const token = randomBytes(32).toString('base64url');
   return { token, hash: sha256(token) };
+}
+
+/** SHA-256 of a value's canonical JSON (RFC 8785), so that the order of its keys does not matter. */
+export function sha256OfJson(value: object): string {
+  const text = canonicalize(value);
+  if (text === undefined) throw new Error('This value has no JSON.');
+  return sha256(text);
 }

@@ -2,13 +2,12 @@ import { desc, eq } from 'drizzle-orm';
 import { z } from 'zod';
 import { withScope } from '@/db/client';
 import { companies, editionCosts, editions } from '@/db/schema';
-import { sha256 } from '@/lib/adapters/ids';
+import { sha256OfJson } from '@/lib/adapters/ids';
 import type { Actor } from '@/lib/contracts/actor';
 import { editionCostsShape, editionShape } from '@/lib/contracts/edition';
 import { faultsOf } from '@/lib/contracts/faults';
 import { ok, refuse, type Result } from '@/lib/contracts/result';
 import { may, reasonNot } from '@/lib/contracts/rights';
-import { canonicalText } from '@/lib/record/canonical';
 import { writeAudit } from '../audit/write';
 
 /** What a price book's file holds: the edition that homeowners may see, and what it costs the contractor. */
@@ -33,7 +32,7 @@ export async function publishEdition(
   }
   const { edition, costs } = parsed.data;
   const { companyId } = actor;
-  const hash = sha256(canonicalText(edition));
+  const hash = sha256OfJson(edition);
   return withScope(actor, async (tx) => {
     // Held so that two editions published at the same moment get two numbers.
     await tx.select({ id: companies.id }).from(companies).where(eq(companies.id, companyId)).for('update');

@@ -2,13 +2,12 @@ import { and, desc, eq } from 'drizzle-orm';
 import { z } from 'zod';
 import { withScope } from '@/db/client';
 import { jobs, surveys } from '@/db/schema';
-import { sha256 } from '@/lib/adapters/ids';
+import { sha256OfJson } from '@/lib/adapters/ids';
 import type { Actor } from '@/lib/contracts/actor';
 import { faultsOf } from '@/lib/contracts/faults';
 import { ok, refuse, type Result } from '@/lib/contracts/result';
 import { may, reasonNot } from '@/lib/contracts/rights';
 import { surveyShape } from '@/lib/contracts/survey';
-import { canonicalText } from '@/lib/record/canonical';
 import { writeAudit } from '../audit/write';
 import { loadKitchen } from '../job/load-kitchen';
 import { repriceSchemes } from '../scheme/reprice';
@@ -37,7 +36,7 @@ export async function importSurvey(
     });
   }
   const body = survey.data;
-  const hash = sha256(canonicalText(body));
+  const hash = sha256OfJson(body);
   return withScope(actor, async (tx) => {
     const own = and(eq(jobs.companyId, companyId), eq(jobs.id, jobId));
     const [job] = await tx.select({ stage: jobs.stage }).from(jobs).where(own).for('update');
