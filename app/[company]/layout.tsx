@@ -4,6 +4,7 @@ import { notFound } from 'next/navigation';
 import type { ReactNode } from 'react';
 import { brandColours, brandStyle } from '@/components/portal/brand-colours';
 import { ContractorProvider } from '@/components/portal/contractor';
+import { SessionWatch } from '@/components/sign-in/session-watch';
 import { readCompany } from './read-company';
 
 interface Props {
@@ -26,6 +27,7 @@ export default async function CompanyLayout({ params, children }: Props) {
       <style nonce={nonce} dangerouslySetInnerHTML={{ __html: brandStyle(brandColours(company.brand)) }} />
       <ContractorProvider value={{ slug: company.slug, name: company.name, phone: company.phone }}>
         {children}
+        <SessionWatch />
       </ContractorProvider>
     </>
   );

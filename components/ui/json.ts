@@ -24,9 +24,27 @@ function faultOf(body: unknown): Fault {
   };
 }
 
+let renew: (() => Promise<boolean>) | null = null;
+
+/** Names what makes an expired session good again, answering whether it did; the answer ends the naming. */
+export function renewSession(work: () => Promise<boolean>): () => void {
+  renew = work;
+  return () => {
+    if (renew === work) renew = null;
+  };
+}
+
+/** Asks, and once more with a renewed session when the first was answered as to somebody signed out. */
+async function ask(address: string, request: RequestInit): Promise<Response> {
+  const answer = await fetch(address, request);
+  if (answer.status !== FAULT_STATUS.signedOut || !renew) return answer;
+  const renewed = await renew().catch(() => false);
+  return renewed ? fetch(address, request) : answer;
+}
+
 /** For SWR: the JSON of one of the program's own addresses; throws the fault. Its shape is the address's contract. */
 export async function readJson<T>(address: string): Promise<T> {
-  const answer = await fetch(address, { cache: 'no-store' });
+  const answer = await ask(address, { cache: 'no-store' });
   const body: unknown = await answer.json();
   if (!answer.ok) throw faultOf(body);
   return body as T;
@@ -39,7 +57,7 @@ export async function sendJson<T>(
   body: unknown,
 ): Promise<Result<T>> {
   try {
-    const answer = await fetch(address, {
+    const answer = await ask(address, {
       method,
       headers: { 'content-type': 'application/json' },
       body: JSON.stringify(body),
