@@ -1,5 +1,4 @@
 import { createHash, randomBytes, randomUUID } from 'node:crypto';
-import canonicalize from 'canonicalize';
 
 /** A fresh row id. */
 export const newId = (): string => randomUUID();
@@ -13,9 +12,16 @@ export function newToken(): { token: string; hash: string } {
   return { token, hash: sha256(token) };
 }
 
-/** SHA-256 of a value's canonical JSON (RFC 8785), so that the order of its keys does not matter. */
-export function sha256OfJson(value: object): string {
-  const text = canonicalize(value);
-  if (text === undefined) throw new Error('This value has no JSON.');
-  return sha256(text);
+/** JSON as RFC 8785 writes it: no spaces, keys by UTF-16 code units, numbers and strings as JSON.stringify has them. */
+function canonicalJson(value: unknown): string {
+  if (Array.isArray(value)) return `[${value.map(canonicalJson).join(',')}]`;
+  if (typeof value !== 'object' || value === null) return JSON.stringify(value) ?? 'null';
+  const members = Object.entries(value)
+    .filter(([, member]) => member !== undefined)
+    .sort(([a], [b]) => (a < b ? -1 : 1))
+    .map(([key, member]) => `${JSON.stringify(key)}:${canonicalJson(member)}`);
+  return `{${members.join(',')}}`;
 }
+
+/** SHA-256 of a value's canonical JSON, so that a value read back from the database hashes the same. */
+export const sha256OfJson = (value: object): string => sha256(canonicalJson(value));
