@@ -20,11 +20,7 @@ interface Refusal {
 function refusalOf(error: unknown): Refusal {
   if (isClerkAPIResponseError(error)) {
     const [first] = error.errors;
-    const locked: unknown = Reflect.get(first?.meta ?? {}, 'lockout_expires_in_seconds');
-    return {
-      code: first?.code ?? 'unknown',
-      waitSeconds: error.retryAfter ?? (typeof locked === 'number' ? locked : undefined),
-    };
+    return { code: first?.code ?? 'unknown', waitSeconds: error.retryAfter };
   }
   const code: unknown = error instanceof Error ? Reflect.get(error, 'code') : null;
   return { code: typeof code === 'string' ? code : 'unknown', waitSeconds: undefined };
@@ -81,8 +77,7 @@ export function problemOf(error: unknown, contractor: { readonly name: string })
     case 'user_locked':
       return {
         field: null,
-        waitSeconds: waitSeconds ?? 60,
-        sentence: `Wrong passwords came too often. Wait ${wait}, or sign in with a code by mail.`,
+        sentence: 'Wrong passwords came too often. Sign in with a code by mail, or try again later.',
       };
     case 'strategy_for_user_invalid':
     case 'factor_not_found':

@@ -9,6 +9,12 @@ const ATTEMPTS_MAX = 5;
 /** Mails with a code for one sign-in, counted over {@link CODE_MS}. */
 const SENDS_MAX = 4;
 
+/** Six digits; never the ones of the mail before. */
+function otherThan(earlier: string | null): string {
+  const code = randomInt(1_000_000).toString().padStart(6, '0');
+  return code === earlier ? otherThan(earlier) : code;
+}
+
 /** A new code in place of any earlier one. Throws when too many were asked for. */
 export function issueCode(
   earlier: Verification | null,
@@ -29,7 +35,7 @@ export function issueCode(
   return {
     strategy,
     status: 'unverified',
-    code: randomInt(1_000_000).toString().padStart(6, '0'),
+    code: otherThan(earlier?.code ?? null),
     attempts: 0,
     sentAt: [...sentAt, now],
     expireAt: now + CODE_MS,
