@@ -1,6 +1,7 @@
 import Link from 'next/link';
 import { notFound, redirect } from 'next/navigation';
 import { PortalFrame } from '@/components/portal/portal-frame';
+import { SignedInAs } from '@/components/sign-in/signed-in-as';
 import { PageTitle } from '@/components/ui/frame';
 import { Panel } from '@/components/ui/panel';
 import { EmptyState } from '@/components/ui/states';
@@ -53,6 +54,7 @@ export default async function HomePage({ params }: { params: Promise<{ company: 
           </ul>
         </>
       )}
+      <SignedInAs />
     </PortalFrame>
   );
 }

@@ -5,6 +5,7 @@ import { Button } from '@/components/ui/button';
 import { TextInput } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import type { Problem } from './problem';
+import { useFaultFocus } from './use-fault-focus';
 
 /** Asks for the mail address, to send a code there. */
 export function AddressStep({
@@ -20,6 +21,7 @@ export function AddressStep({
   readonly onPassword: () => void;
 }) {
   const [problem, setProblem] = useState<Problem | null>(null);
+  const form = useFaultFocus(problem);
   const [busy, setBusy] = useState(false);
 
   async function send(event: FormEvent) {
@@ -36,7 +38,7 @@ export function AddressStep({
   }
 
   return (
-    <form method="post" onSubmit={send} className="grid gap-5" noValidate>
+    <form ref={form} method="post" onSubmit={send} className="grid gap-5" noValidate>
       {problem?.field === null && <Notice kind="error">{problem.sentence}</Notice>}
       <TextInput
         label="Mail address"

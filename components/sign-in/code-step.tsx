@@ -5,6 +5,7 @@ import { Button } from '@/components/ui/button';
 import { TextInput } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import type { Problem } from './problem';
+import { useFaultFocus } from './use-fault-focus';
 import { useWait } from './use-wait';
 
 /** Seconds between two mails with a code. */
@@ -37,6 +38,7 @@ export function CodeStep({
 }) {
   const [code, setCode] = useState('');
   const [problem, setProblem] = useState<Problem | null>(null);
+  const form = useFaultFocus(problem);
   const [busy, setBusy] = useState(false);
   const [sent, setSent] = useState(1);
   const [wait, beginWait] = useWait(RESEND_SECONDS);
@@ -69,7 +71,7 @@ export function CodeStep({
   }
 
   return (
-    <form method="post" onSubmit={check} className="grid gap-5" noValidate>
+    <form ref={form} method="post" onSubmit={check} className="grid gap-5" noValidate>
       <p role="status" className="max-w-prose">
         {sent === 1 ? 'A code was sent to ' : 'A new code was sent to '}
         <strong className="break-words">{email}</strong>

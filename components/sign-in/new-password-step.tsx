@@ -5,6 +5,7 @@ import { Button } from '@/components/ui/button';
 import { Checkbox, TextInput } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import type { Problem } from './problem';
+import { useFaultFocus } from './use-fault-focus';
 
 /** Takes the new password once its code was right. */
 export function NewPasswordStep({
@@ -17,6 +18,7 @@ export function NewPasswordStep({
   const [password, setPassword] = useState('');
   const [shown, setShown] = useState(false);
   const [problem, setProblem] = useState<Problem | null>(null);
+  const form = useFaultFocus(problem);
   const [busy, setBusy] = useState(false);
 
   async function set(event: FormEvent) {
@@ -29,7 +31,7 @@ export function NewPasswordStep({
   }
 
   return (
-    <form method="post" onSubmit={set} className="grid gap-5" noValidate>
+    <form ref={form} method="post" onSubmit={set} className="grid gap-5" noValidate>
       {problem && problem.field !== 'password' && <Notice kind="error">{problem.sentence}</Notice>}
       <input type="hidden" name="email" autoComplete="username" value={email} />
       <TextInput

@@ -5,6 +5,7 @@ import { Button } from '@/components/ui/button';
 import { TextInput } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import type { Problem } from './problem';
+import { useFaultFocus } from './use-fault-focus';
 
 /** Asks for address and password, for those of the staff who have one. */
 export function PasswordStep({
@@ -24,6 +25,7 @@ export function PasswordStep({
 }) {
   const [password, setPassword] = useState('');
   const [problem, setProblem] = useState<Problem | null>(null);
+  const form = useFaultFocus(problem);
   const [busy, setBusy] = useState(false);
 
   const isWhole = () => {
@@ -54,13 +56,14 @@ export function PasswordStep({
   }
 
   return (
-    <form method="post" onSubmit={check} className="grid gap-5" noValidate>
+    <form ref={form} method="post" onSubmit={check} className="grid gap-5" noValidate>
       {problem?.field === null && <Notice kind="error">{problem.sentence}</Notice>}
       <TextInput
         label="Mail address"
         fault={problem?.field === 'email' ? problem.sentence : null}
         name="email"
         type="email"
+        autoFocus={email === ''}
         inputMode="email"
         autoComplete="username"
         autoCapitalize="none"
@@ -73,6 +76,7 @@ export function PasswordStep({
         fault={problem?.field === 'password' ? problem.sentence : null}
         name="password"
         type="password"
+        autoFocus={email !== ''}
         autoComplete="current-password"
         value={password}
         onChange={(event) => setPassword(event.target.value)}

@@ -37,7 +37,7 @@ export function SessionWatch() {
         action={<ButtonLink href={signIn}>Sign in again</ButtonLink>}
       >
         <p role="alert">
-          Your time here ran out, or you signed out in another window. Sign in again to go on where you were.
+          The sign-in ended by itself or in another window. Sign in again to go on where you were.
         </p>
       </Notice>
     </div>

@@ -4,6 +4,7 @@ import { requireActor } from '@/app/[company]/visitor';
 import { decisionsOf } from '@/components/choosing/decisions';
 import { JobOverview } from '@/components/portal/job-overview';
 import { nextStep, type NextStep } from '@/components/portal/next-step';
+import { SignedInAs } from '@/components/sign-in/signed-in-as';
 import { paths } from '@/lib/paths';
 import { listDraws } from '@/lib/services/draw/list';
 import { readKitchen } from '@/lib/services/scheme/read-kitchen';
@@ -40,32 +41,35 @@ export default async function JobPage({ params }: { params: Promise<{ company: s
     changes: paths.changeOrders(slug, jobId),
   };
   return (
-    <JobOverview
-      job={job}
-      next={next}
-      nextHref={next.goes && hrefs[next.goes]}
-      estimateCents={newest?.totalCents ?? null}
-      balance={schedule.ok ? schedule.value.balance : null}
-      phone={company.phone}
-      contractor={company.name}
-      rooms={[
-        {
-          href: paths.choose(slug, jobId),
-          label: signed ? 'Look, or ask for a change' : 'Choose',
-          about: 'Your kitchen, every choice and what it costs.',
-        },
-        {
-          href: paths.payments(slug, jobId),
-          label: 'Payments',
-          about: 'What is due, what was paid, receipts.',
-        },
-        { href: paths.book(slug, jobId), label: 'Job book', about: 'Every signed page, sealed, in order.' },
-        {
-          href: paths.changeOrders(slug, jobId),
-          label: 'Change orders',
-          about: 'What changed after signing.',
-        },
-      ]}
-    />
+    <>
+      <JobOverview
+        job={job}
+        next={next}
+        nextHref={next.goes && hrefs[next.goes]}
+        estimateCents={newest?.totalCents ?? null}
+        balance={schedule.ok ? schedule.value.balance : null}
+        phone={company.phone}
+        contractor={company.name}
+        rooms={[
+          {
+            href: paths.choose(slug, jobId),
+            label: signed ? 'Look, or ask for a change' : 'Choose',
+            about: 'Your kitchen, every choice and what it costs.',
+          },
+          {
+            href: paths.payments(slug, jobId),
+            label: 'Payments',
+            about: 'What is due, what was paid, receipts.',
+          },
+          { href: paths.book(slug, jobId), label: 'Job book', about: 'Every signed page, sealed, in order.' },
+          {
+            href: paths.changeOrders(slug, jobId),
+            label: 'Change orders',
+            about: 'What changed after signing.',
+          },
+        ]}
+      />
+      <SignedInAs />
+    </>
   );
 }
