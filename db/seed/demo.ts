@@ -1,4 +1,5 @@
 import type { CompanyInput } from '@/lib/contracts/company';
+import { quillbackTerms, ternHollowTerms } from './scenario/terms';
 
 type Company = Omit<CompanyInput, 'clerkOrganizationId'>;
 
@@ -36,13 +37,7 @@ export const TERN_HOLLOW: Company = {
       { label: 'Walk-through', share: 100_000, due: 'walkThrough' },
     ],
     ruleSet: 'MA',
-    terms: {
-      version: 1,
-      // Common for lump-sum work to real property; local law decides.
-      tax: { mode: 'onMaterials', basis: 'invoice', rates: {}, place: 'Massachusetts' },
-      discount: { kind: 'none' },
-      crewSize: 2,
-    },
+    terms: ternHollowTerms,
     warrantyYears: 5,
     insurance: 'General liability and workers’ compensation; certificates on request.',
     permits: 'Tern Hollow gets the permits that the work needs.',
@@ -63,6 +58,7 @@ export const QUILLBACK: Company = {
   stripeAccountId: 'acct_quillback',
   settings: {
     ...TERN_HOLLOW.settings,
+    terms: quillbackTerms,
     ruleSet: 'PA',
     permits: 'Quillback gets the permits that the work needs.',
     salespersonLimitCents: 0,
@@ -82,6 +78,8 @@ export const HOMEOWNERS = {
   odile: { name: 'Odile Fenn', email: 'odile@fenn.example' },
   /** Gannet Court, measured. */
   casimir: { name: 'Casimir Holt', email: 'casimir@holt.example' },
+  /** Alder Yard, choosing: the other household of Tern Hollow. */
+  perrin: { name: 'Perrin Oake', email: 'perrin@oake.example' },
   /** Quillback's household. */
   petra: { name: 'Petra Stannard', email: 'petra@stannard.example' },
 } as const;
@@ -89,6 +87,7 @@ export const HOMEOWNERS = {
 export const JOBS = {
   millRace: { name: 'Mill Race', address: '8 Mill Race, Haddon Ferry, MA' },
   gannetCourt: { name: 'Gannet Court', address: '3 Gannet Court, Haddon Ferry, MA' },
+  alderYard: { name: 'Alder Yard', address: '5 Alder Yard, Haddon Ferry, MA' },
   sorrelLane: { name: 'Sorrel Lane', address: '14 Sorrel Lane, Haddon Ferry, MA' },
   thistleRow: { name: 'Thistle Row', address: '21 Thistle Row, Lower Marsh, PA' },
 } as const;

@@ -11,6 +11,7 @@ import type { ChoiceChange, Choices } from '@/lib/engine/types';
 import { cloneTestDatabase, type TestDatabase } from '@/lib/local/test-database';
 import { publishEdition } from '@/lib/services/edition/publish';
 import { createJob } from '@/lib/services/job/create';
+import { readJob } from '@/lib/services/job/read';
 import { changeScheme } from '@/lib/services/scheme/change';
 import { createScheme } from '@/lib/services/scheme/create';
 import { discardScheme } from '@/lib/services/scheme/discard';
@@ -288,17 +289,20 @@ describe('a survey', () => {
 });
 
 describe('an edition', () => {
-  it('is the owner’s to publish, in order, and jobs that are open keep theirs', async () => {
+  it('is the owner’s to publish, in order; open jobs keep theirs, and one that has none gets it', async () => {
     const own = await addContractor(`reedmace-${lane.jobId.slice(0, 8)}`);
     const publish = (number: number, actor: Actor = own.owner) =>
       publishEdition(actor, { edition: edition(number), costs: costs(number) });
     expect(codeOf(await publish(1, own.seller))).toBe('notAllowed');
     expect(codeOf(await publish(2))).toBe('invalid');
-    valueOf(await publish(1));
+    const bare = valueOf(await createJob(own.owner, { name: 'Bare', address: 'Lane' }));
+    const { editionId } = valueOf(await publish(1));
+    expect(valueOf(await readJob(own.owner, { jobId: bare.id })).editionId).toBe(editionId);
     const before = valueOf(await createJob(own.owner, { name: 'Before', address: 'Lane' }));
     valueOf(await publish(2));
     const after = valueOf(await createJob(own.owner, { name: 'After', address: 'Lane' }));
-    expect(before.editionId).not.toBe(after.editionId);
+    expect(before.editionId).toBe(editionId);
+    expect(after.editionId).not.toBe(editionId);
     const books = await withScope(own.worker, (tx) => tx.select().from(editionCosts));
     expect(books).toHaveLength(2);
   });

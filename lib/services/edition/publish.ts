@@ -1,7 +1,7 @@
-import { desc, eq } from 'drizzle-orm';
+import { and, desc, eq, isNull } from 'drizzle-orm';
 import { z } from 'zod';
 import { withScope } from '@/db/client';
-import { companies, editionCosts, editions } from '@/db/schema';
+import { companies, editionCosts, editions, jobs } from '@/db/schema';
 import { sha256OfJson } from '@/lib/adapters/ids';
 import type { Actor } from '@/lib/contracts/actor';
 import { editionCostsShape, editionShape } from '@/lib/contracts/edition';
@@ -14,8 +14,8 @@ import { writeAudit } from '../audit/write';
 const inputShape = z.strictObject({ edition: editionShape, costs: editionCostsShape });
 
 /**
- * Publishes the next edition of a company's price book. Jobs that are open keep the edition they have. Faults are
- * told by path, and nothing is stored.
+ * Publishes the next edition of a company's price book. Jobs that are open keep the edition they have; those that have
+ * none yet get this one. Faults are told by path, and nothing is stored.
  */
 export async function publishEdition(
   actor: Actor,
@@ -58,6 +58,10 @@ export async function publishEdition(
       .returning({ id: editions.id });
     if (!row) throw new Error('The edition was not stored.');
     await tx.insert(editionCosts).values({ companyId, editionId: row.id, body: costs });
+    await tx
+      .update(jobs)
+      .set({ editionId: row.id })
+      .where(and(eq(jobs.companyId, companyId), isNull(jobs.editionId)));
     await writeAudit(tx, actor, {
       verb: 'edition.publish',
       subject: row.id,
