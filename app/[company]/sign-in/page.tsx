@@ -7,6 +7,7 @@ import { SignOutButton } from '@/components/sign-in/sign-out-button';
 import { ButtonLink } from '@/components/ui/button';
 import { paths } from '@/lib/paths';
 import { findSignedIn } from '@/lib/services/session/signed-in';
+import { wayBack } from './way-back';
 
 export const metadata: Metadata = { title: 'Sign in' };
 
@@ -16,16 +17,6 @@ interface Props {
 }
 
 const one = (value: string | string[] | undefined): string => (Array.isArray(value) ? value[0] : value) ?? '';
-
-/** Where to go afterwards: a page of this contractor's, whatever the address says. */
-function wayBack(company: string, asked: string): string {
-  const home = paths.home(company);
-  const own = new URL(home, 'http://own.invalid');
-  if (!URL.canParse(asked, own)) return home;
-  const target = new URL(asked, own);
-  const inside = target.pathname === home || target.pathname.startsWith(`${home}/`);
-  return target.origin === own.origin && inside ? target.pathname + target.search : home;
-}
 
 /** The contractor's own sign-in. */
 export default async function SignInPage({ params, searchParams }: Props) {
