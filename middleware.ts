@@ -108,7 +108,11 @@ function setHeaders(response: NextResponse, policy: string): NextResponse {
 function companyToSignInTo({ pathname }: URL): string | null {
   const [, company = '', page = ''] = pathname.split('/');
   if (company === '' || NO_COMPANY.has(company) || OPEN_PAGES.has(page)) return null;
-  return decodeURIComponent(company);
+  try {
+    return decodeURIComponent(company);
+  } catch {
+    return null;
+  }
 }
 
 function newNonce(): string {

@@ -17,7 +17,11 @@ export const environmentShape = z.object({
   CLERK_PUBLISHABLE_KEY: z.string().startsWith('pk_'),
   CLERK_SECRET_KEY: z.string().startsWith('sk_'),
   /** SPKI PEM with real newlines; session tokens are verified with it, without a network call. */
-  CLERK_JWT_KEY: z.string().includes('BEGIN PUBLIC KEY'),
+  CLERK_JWT_KEY: z
+    .string()
+    .includes('BEGIN PUBLIC KEY')
+    // With `\n` in two characters every token would be refused, and everybody led back to sign-in.
+    .refine((pem) => !pem.includes('\\n'), 'It needs real line breaks.'),
   CLERK_WEBHOOK_SIGNING_SECRET: z.string().startsWith('whsec_'),
   CLERK_API_URL: optionalUrl,
   CLERK_FAPI_URL: optionalUrl,
