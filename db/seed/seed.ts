@@ -2,6 +2,7 @@ import { closePool } from '@/db/client';
 import { ensureContractor } from './contractor';
 import { HOMEOWNERS, JOBS, QUILLBACK, STAFF, TERN_HOLLOW } from './demo';
 import { ensureInvited, ensureJob } from './job';
+import { ensureKitchens, ensurePriceBooks } from './kitchens';
 
 /** The staff's password in the demo, which stands on one machine alone. */
 const PASSWORD = 'veneer-and-stile-1974';
@@ -14,14 +15,21 @@ async function seed(): Promise<string[]> {
   const [ines, rowan] = await ensureContractor(TERN_HOLLOW, [STAFF.ines, STAFF.rowan], PASSWORD);
   const [dov] = await ensureContractor(QUILLBACK, [STAFF.dov], PASSWORD);
   if (!ines || !rowan || !dov) throw new Error('The staff is not complete.');
+  await ensurePriceBooks({ ines, dov });
 
-  await ensureJob(rowan, JOBS.millRace);
-  await ensureJob(rowan, JOBS.gannetCourt);
-  const lane = await ensureJob(rowan, JOBS.sorrelLane);
-  await ensureInvited(rowan, lane.id, HOMEOWNERS.mara);
-  await ensureInvited(rowan, lane.id, HOMEOWNERS.teo);
-  const row = await ensureJob(dov, JOBS.thistleRow);
-  await ensureInvited(dov, row.id, HOMEOWNERS.petra);
+  const jobs = {
+    millRace: await ensureJob(rowan, JOBS.millRace),
+    gannetCourt: await ensureJob(rowan, JOBS.gannetCourt),
+    alderYard: await ensureJob(rowan, JOBS.alderYard),
+    sorrelLane: await ensureJob(rowan, JOBS.sorrelLane),
+    thistleRow: await ensureJob(dov, JOBS.thistleRow),
+  };
+  await ensureKitchens({ rowan, dov }, jobs);
+  await ensureInvited(rowan, jobs.millRace.id, HOMEOWNERS.odile);
+  await ensureInvited(rowan, jobs.alderYard.id, HOMEOWNERS.perrin);
+  await ensureInvited(rowan, jobs.sorrelLane.id, HOMEOWNERS.mara);
+  await ensureInvited(rowan, jobs.sorrelLane.id, HOMEOWNERS.teo);
+  await ensureInvited(dov, jobs.thistleRow.id, HOMEOWNERS.petra);
 
   return [
     ...Object.values(STAFF).map(
@@ -30,7 +38,7 @@ async function seed(): Promise<string[]> {
     ...[HOMEOWNERS.mara, HOMEOWNERS.teo].map(
       ({ name, email }) => `  ${name}, homeowner: ${email}, by the invitation in the mailbox`,
     ),
-    '2 contractors, 4 jobs',
+    `2 contractors, ${Object.keys(jobs).length} jobs`,
   ];
 }
 
