@@ -213,6 +213,7 @@ const body = z.strictObject({
         'nailerFoot',
         'fillerStrip',
         'panel',
+        'toeFoot',
         'box',
         'removal',
         'newCabinet',

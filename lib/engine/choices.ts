@@ -128,11 +128,17 @@ export interface Reach {
   readonly choices: Choices;
   readonly swaps: readonly ChoiceChange[];
   readonly reason?: string;
+  /** When not available: another option of the same key that needs no swap. */
+  readonly nearest?: ChoiceChange;
 }
 
+/** More swaps than any chain of clashes needs: each zone could ask for one of each key. */
+const MOST_SWAPS = 16;
+
 /**
- * Choices after a change and the swaps it needs (X1). The picked key never gives way; each clash is answered by the
- * first option in the edition's order that removes it. `notAvailable` when none does.
+ * Choices after a change and the swaps it needs (X1). The picked key never gives way. Each clash is answered by the
+ * first option in the edition's order that leaves none in that zone, else by the first that removes this one. A key
+ * that may not differ by zone is swapped for the whole kitchen.
  */
 export function reach(
   edition: Edition,
@@ -140,32 +146,92 @@ export function reach(
   change: ChoiceChange,
   zones: readonly Zone[],
 ): Reach {
-  let now = applyChange(choices, change);
-  if ('inside' in change) return { availability: 'available', choices: now, swaps: [] };
+  const changed = applyChange(choices, change);
+  if ('inside' in change) return { availability: 'available', choices: changed, swaps: [] };
+  const settled = settle(edition, changed, change, zones);
+  if (settled.fault !== null)
+    return {
+      availability: 'notAvailable',
+      choices,
+      swaps: [],
+      reason: settled.fault,
+      ...nearestTo(edition, choices, change, zones),
+    };
+  if (settled.swaps.length === 0) return { availability: 'available', choices: changed, swaps: [] };
+  return {
+    availability: 'availableWithSwap',
+    choices: settled.choices,
+    swaps: settled.swaps,
+    reason: settled.reasons.join(' '),
+  };
+}
+
+/** The changes that a change brings with it; `null` when it does not go together with the rest. */
+export function swapsFor(
+  edition: Edition,
+  choices: Choices,
+  change: ChoiceChange,
+  zones: readonly Zone[],
+): readonly ChoiceChange[] | null {
+  const reached = reach(edition, choices, change, zones);
+  return reached.availability === 'notAvailable' ? null : reached.swaps;
+}
+
+interface Settled {
+  readonly choices: Choices;
+  readonly swaps: readonly ChoiceChange[];
+  readonly reasons: readonly string[];
+  readonly fault: string | null;
+}
+
+function settle(
+  edition: Edition,
+  changed: Choices,
+  change: { readonly key: ChoiceKey; readonly zone: ZoneOrKitchen },
+  zones: readonly Zone[],
+): Settled {
+  let now = changed;
   const swaps: ChoiceChange[] = [];
-  const touched = change.zone === 'kitchen' ? zones : [change.zone];
   const reasons: string[] = [];
-  for (const zone of touched) {
-    for (let step = 0; step < 6; step++) {
-      const found = clash(edition, chosenIn(now, zone));
-      if (!found) break;
-      // The picked key stands; the other side of the clash gives way.
-      const key: ChoiceKey = found.key === change.key ? otherSide(found.key) : found.key;
-      const answer = optionsOf(edition, key).find((option) => {
-        const tried = { ...chosenIn(now, zone), [key]: option.id };
-        const left = clash(edition, tried);
-        return left === null || (left.key !== found.key && left.key !== change.key);
+  for (let step = 0; step <= MOST_SWAPS; step++) {
+    const zone = zones.find((one) => clash(edition, chosenIn(now, one)) !== null);
+    if (zone === undefined) return { choices: now, swaps, reasons, fault: null };
+    const here = chosenIn(now, zone);
+    const found = clash(edition, here);
+    if (!found) break;
+    const key = found.key === change.key ? otherSide(found.key) : found.key;
+    const left = (option: string) => clash(edition, { ...here, [key]: option });
+    const all = optionsOf(edition, key);
+    const answer =
+      all.find((option) => left(option.id) === null) ??
+      all.find((option) => {
+        const rest = left(option.id);
+        return rest !== null && rest.key !== found.key && rest.key !== key;
       });
-      if (!answer || step === 5)
-        return { availability: 'notAvailable', choices, swaps: [], reason: found.reason };
-      const swap: ChoiceChange = { key, zone: change.zone, option: answer.id };
-      if (!reasons.includes(found.reason)) reasons.push(found.reason);
-      swaps.push(swap);
-      now = applyChange(now, swap);
-    }
+    if (!answer || answer.id === here[key]) return { choices: now, swaps, reasons, fault: found.reason };
+    const own = now.zones[zone]?.[key] !== undefined;
+    const zoned = edition.zonedKeys.includes(key);
+    const where: ZoneOrKitchen = zoned && (own || change.zone !== 'kitchen') ? zone : 'kitchen';
+    const swap: ChoiceChange = { key, zone: where, option: answer.id };
+    swaps.push(swap);
+    if (!reasons.includes(found.reason)) reasons.push(found.reason);
+    now = applyChange(now, swap);
   }
-  if (swaps.length === 0) return { availability: 'available', choices: now, swaps };
-  return { availability: 'availableWithSwap', choices: now, swaps, reason: reasons.join(' ') };
+  return { choices: now, swaps, reasons, fault: reasons.join(' ') || 'These choices do not go together.' };
+}
+
+function nearestTo(
+  edition: Edition,
+  choices: Choices,
+  change: { readonly key: ChoiceKey; readonly zone: ZoneOrKitchen; readonly option: string },
+  zones: readonly Zone[],
+): { nearest?: ChoiceChange } {
+  const other = optionsOf(edition, change.key).find((option) => {
+    if (option.id === change.option) return false;
+    const tried = applyChange(choices, { ...change, option: option.id });
+    return zones.every((zone) => clash(edition, chosenIn(tried, zone)) === null);
+  });
+  return other ? { nearest: { ...change, option: other.id } } : {};
 }
 
 /** What gives way when the picked key itself is the one a clash names. */

@@ -212,6 +212,7 @@ export interface LabourRate {
     | 'nailerFoot'
     | 'fillerStrip'
     | 'panel'
+    | 'toeFoot'
     | 'box'
     | 'removal'
     | 'newCabinet'

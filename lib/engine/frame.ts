@@ -25,6 +25,10 @@ export interface PlacedOpening extends FrameRect {
 
 export interface FrameMember extends FrameRect {
   readonly kind: 'stile' | 'rail' | 'mullion';
+  readonly part: 'stileLeft' | 'stileRight' | 'railTop' | 'railBottom' | 'between';
+  /** A mullion that is framed into the top or the bottom rail. */
+  readonly underTopRail?: boolean;
+  readonly onBottomRail?: boolean;
 }
 
 export interface PlacedFrame {
@@ -60,17 +64,26 @@ interface Around {
 }
 
 /** Every opening and member of a frame in place. `height` is the frame's, toe space excluded. */
-export function placeFrame(frame: FaceFrame, width: Sixtyfourths, height: Sixtyfourths): PlacedFrame {
+export function placeFrame(frame: FaceFrame, width: number, height: number): PlacedFrame {
   const openings: PlacedOpening[] = [];
-  const members: FrameMember[] = [
-    { kind: 'stile', ...rect(0, 0, frame.stileLeft, height) },
-    { kind: 'stile', ...rect(width - frame.stileRight, 0, frame.stileRight, height) },
-  ];
+  const members: FrameMember[] = [];
+  if (frame.stileLeft > 0)
+    members.push({ kind: 'stile', part: 'stileLeft', ...rect(0, 0, frame.stileLeft, height) });
+  if (frame.stileRight > 0)
+    members.push({
+      kind: 'stile',
+      part: 'stileRight',
+      ...rect(width - frame.stileRight, 0, frame.stileRight, height),
+    });
   const clear = width - frame.stileLeft - frame.stileRight;
   if (frame.railTop > 0)
-    members.push({ kind: 'rail', ...rect(frame.stileLeft, height - frame.railTop, clear, frame.railTop) });
+    members.push({
+      kind: 'rail',
+      part: 'railTop',
+      ...rect(frame.stileLeft, height - frame.railTop, clear, frame.railTop),
+    });
   if (frame.railBottom > 0)
-    members.push({ kind: 'rail', ...rect(frame.stileLeft, 0, clear, frame.railBottom) });
+    members.push({ kind: 'rail', part: 'railBottom', ...rect(frame.stileLeft, 0, clear, frame.railBottom) });
 
   function walk(layout: FrameLayout, x: number, top: number, w: number, h: number, around: Around): void {
     if ('opening' in layout) {
@@ -109,7 +122,13 @@ export function placeFrame(frame: FaceFrame, width: Sixtyfourths, height: Sixtyf
         });
         along += size.width;
         if (after !== undefined) {
-          members.push({ kind: 'mullion', ...rect(along, top - h, after, h) });
+          members.push({
+            kind: 'mullion',
+            part: 'between',
+            underTopRail: around.top,
+            onBottomRail: around.bottom,
+            ...rect(along, top - h, after, h),
+          });
           along += after;
         }
       } else {
@@ -123,7 +142,7 @@ export function placeFrame(frame: FaceFrame, width: Sixtyfourths, height: Sixtyf
         along -= size.height;
         if (after !== undefined) {
           along -= after;
-          members.push({ kind: 'rail', ...rect(x, along, w, after) });
+          members.push({ kind: 'rail', part: 'between', ...rect(x, along, w, after) });
         }
       }
     });

@@ -75,7 +75,7 @@ export const sorrelLane: Survey = {
     base('N-01', 60, 36, drawerOver(33, 'pair', {}, 'falseFront')),
     base('N-02', 96, 24, drawerOver(21, 'pair')),
     base('N-03', 120, 36, opening(1, 'cornerFold', 10.5, 27.5), {
-      zone: 'base',
+      backExposed: true,
       ...cornerFrames({ legA: 36, legB: 36, otherWall: 'P', height: 30.5, depth: 24, hung: 'right' }),
     }),
     upper(
