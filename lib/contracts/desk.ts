@@ -34,7 +34,9 @@ export function nextStepOf(job: {
       if (job.guests === 0 && job.openInvitations === 0) return 'Invite the household.';
       if (job.guests === 0) return 'The household has not opened its invitation yet.';
       if (job.signaturesMissing !== null && job.signaturesMissing > 0)
-        return job.signaturesMissing === 1 ? 'One signature is missing.' : `${job.signaturesMissing} signatures are missing.`;
+        return job.signaturesMissing === 1
+          ? 'One signature is missing.'
+          : `${job.signaturesMissing} signatures are missing.`;
       return 'The household is choosing.';
     case 'signed':
       return job.drawDue ? 'The deposit is due.' : 'Final measure, samples, then release to the shop.';
