@@ -1,7 +1,7 @@
-import { existsSync, readFileSync } from 'node:fs';
+import { readFileSync } from 'node:fs';
 import path from 'node:path';
-import { pathToFileURL } from 'node:url';
 import { z } from 'zod';
+import { startClerkFake } from './clerk/server';
 import { MAIL_DOMAIN, origins } from './environment';
 import { startMailFake } from './mail/server';
 import { startStripeFake } from './stripe/server';
@@ -17,17 +17,6 @@ export type FakesPlan = z.infer<typeof fakesPlanShape>;
 
 interface Fake {
   stop(): Promise<void>;
-}
-
-/** Until the sign-in service's stand-in is there, the others run without it. */
-async function startClerk(options: unknown): Promise<Fake[]> {
-  const file = path.join(__dirname, 'clerk', 'server.ts');
-  if (!existsSync(file)) return [];
-  const loaded: Record<string, unknown> = await import(pathToFileURL(file).href).catch((error: unknown) => {
-    console.error(error);
-    return {};
-  });
-  return typeof loaded.startClerkFake === 'function' ? [await loaded.startClerkFake(options)] : [];
 }
 
 function clerkOptions(settings: Settings, stateFolder: string) {
@@ -71,7 +60,7 @@ async function main(planFile: string): Promise<void> {
       }),
     );
   }
-  if (fakes.includes('clerk')) started.push(...(await startClerk(clerkOptions(settings, stateFolder))));
+  if (fakes.includes('clerk')) started.push(await startClerkFake(clerkOptions(settings, stateFolder)));
   if (fakes.includes('stripe')) started.push(await startStripeFake(stripeOptions(settings, stateFolder)));
   console.log('ready');
   let stopping = false;
