@@ -13,7 +13,8 @@ export const ROOMS = [
   },
   { room: 'lib/engine', imports: [] },
   { room: 'lib/record', imports: [], types: ['lib/engine', 'lib/contracts'] },
-  { room: 'lib/contracts', imports: [], types: ['lib/engine'] },
+  // Beside types: how a length is read, and the lists of keys and zones.
+  { room: 'lib/contracts', imports: ['lib/engine/length', 'lib/engine/types'], types: ['lib/engine'] },
   { room: 'lib/paths', imports: [] },
   { room: 'lib/adapters', imports: ['lib/contracts'] },
   {

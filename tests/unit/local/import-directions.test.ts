@@ -33,7 +33,7 @@ describe('an import against the directions is an error', () => {
     ['components/job/card.tsx', "import Stripe from 'stripe'"],
     ['db/schema/job.ts', "import { x } from '@/lib/services/job/list'"],
     ['lib/adapters/mail.ts', "import { x } from '@/db/client'"],
-    ['lib/contracts/survey.ts', "import { x } from '@/lib/engine/types'"],
+    ['lib/contracts/survey.ts', "import { x } from '@/lib/engine/price'"],
     ['lib/engine/price.ts', "import type { X } from '@/lib/contracts/survey'"],
     ['lib/engine/price.ts', "import fs from 'node:fs'"],
     ['lib/record/seal.ts', "export * from '../engine/types'"],
