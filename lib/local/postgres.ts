@@ -295,6 +295,8 @@ async function ensureRoles(record: ClusterRecord, port: number): Promise<void> {
       const attributes = `login ${rights} nosuperuser nocreaterole nobypassrls noreplication password '${record.passwords[role]}'`;
       await sql.unsafe(`${known.length > 0 ? 'alter' : 'create'} role ${role} ${attributes}`);
     }
+    // A database is dropped although the program is still connected to it.
+    await sql`grant pg_signal_backend to app_owner`;
   } finally {
     await sql.end({ timeout: 1 });
   }
