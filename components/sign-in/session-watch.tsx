@@ -8,6 +8,7 @@ import { ButtonLink } from '@/components/ui/button';
 import { renewSession } from '@/components/ui/json';
 import { Notice } from '@/components/ui/notice';
 import { paths } from '@/lib/paths';
+import { isLeaving } from './leaving';
 
 /**
  * Keeps a page's session fresh, and says so when it has ended while the page was open: in another window, by time, or
@@ -25,7 +26,7 @@ export function SessionWatch() {
   // A window that slept comes back with a token that has run out; the next call waits for a fresh one.
   useEffect(() => renewSession(async () => (await getToken({ skipCache: true })) !== null), [getToken]);
 
-  if (!contractor || !wasSignedIn || !isLoaded || isSignedIn) return null;
+  if (!contractor || !wasSignedIn || !isLoaded || isSignedIn || isLeaving()) return null;
   const back = pathname + (search === '' ? '' : `?${search}`);
   const signIn = `${paths.signIn(contractor.slug)}?${new URLSearchParams({ back }).toString()}`;
   return (
