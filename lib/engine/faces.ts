@@ -37,6 +37,8 @@ export interface Face {
   readonly renewed: boolean;
   /** Ceiling or soffit above it, from the floor. */
   readonly overhead: number;
+  /** A wall cabinet close above an appliance: no light rail goes under it (C4). */
+  readonly standsOver: boolean;
   readonly left: Side;
   readonly right: Side;
 }
@@ -129,6 +131,20 @@ function overheadOf(survey: Survey, one: Standing): number {
   return least;
 }
 
+/** An appliance less than this under a wall cabinet leaves no counter to light: a foot. */
+const CLOSE_UNDER = 12 * 64;
+
+const standsOver = (survey: Survey, one: Standing): boolean =>
+  survey.appliances.some(
+    (appliance) =>
+      appliance.wall === one.wall.id &&
+      appliance.within === undefined &&
+      appliance.at < one.at + one.width - LEVEL &&
+      appliance.at + appliance.width > one.at + LEVEL &&
+      appliance.bottom < one.cabinet.bottom &&
+      appliance.bottom + appliance.height > one.cabinet.bottom - CLOSE_UNDER,
+  );
+
 /** Whether two cabinets stand in one band of the wall, so that their stiles can meet. */
 const sameBand = (a: Cabinet, b: Cabinet): boolean => a.bottom < top(b) - LEVEL && b.bottom < top(a) - LEVEL;
 
@@ -185,6 +201,7 @@ export function facesOf(survey: Survey): Face[] {
     placed: placeFrame(one.frame, one.width, one.cabinet.height),
     renewed: isRenewed(one.cabinet),
     overhead: overheadOf(survey, one),
+    standsOver: standsOver(survey, one),
     left: beside(index, one, 'left'),
     right: beside(index, one, 'right'),
   }));

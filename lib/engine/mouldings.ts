@@ -60,7 +60,8 @@ const profileFor = (made: Made, kind: MouldingKind): MouldingProfile | null => m
 const takes = (face: Face, kind: MouldingKind): boolean => {
   if (!face.renewed) return false;
   const { tier } = face.cabinet;
-  return kind === 'crown' ? tier !== 'base' : kind === 'base' ? tier !== 'wall' : tier === 'wall';
+  if (kind === 'lightRail') return tier === 'wall' && !face.standsOver;
+  return kind === 'crown' ? tier !== 'base' : tier !== 'wall';
 };
 
 const levelOf = (face: Face, kind: MouldingKind): number =>

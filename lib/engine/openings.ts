@@ -1,4 +1,4 @@
-import { baseFiller, crownFit, type CrownFit } from './crown';
+import { baseFiller, crownFit, valanceHeight, type CrownFit } from './crown';
 import type { DoorStyle, Edition } from './edition-types';
 import type { Face } from './faces';
 import type { PlacedOpening } from './frame';
@@ -118,6 +118,8 @@ export interface FaceMeasure {
   readonly openings: readonly OpeningMeasure[];
   /** How the crown sits over it; `null` without one. */
   readonly crown: CrownFit | null;
+  /** Height of the strip that hides the light under it (C4); 0 when none is needed. */
+  readonly valance: number;
   readonly fiveArea: number;
   readonly slabArea: number;
   readonly fronts: number;
@@ -198,12 +200,22 @@ export function measureFace(face: Face, made: Made, edition: Edition): FaceMeasu
     // The hung leaf of a folding corner carries the one pull of the two.
     if (placed.opening.kind === 'cornerFold' && !isPulled(face, placed)) sum.pulls -= 1;
   }
+  const valance = valanceOf(face, made, edition);
+  if (valance > 0) sum.fillerStrips += 1;
   const sides =
     (sideCover(face, 'left', edition.shop.panelThickness) +
       sideCover(face, 'right', edition.shop.panelThickness)) *
     cabinet.height;
   const covered = cabinet.action === 'reface' ? Math.max(0, face.width * cabinet.height - open) + sides : 0;
-  return { face, openings, crown, covered, ...sum };
+  return { face, openings, crown, valance, covered, ...sum };
+}
+
+/** A light rail that is high enough hides the fixture; else a strip does (C4). */
+function valanceOf(face: Face, made: Made, edition: Edition): number {
+  const { underLight, tier } = face.cabinet;
+  if (!underLight || tier !== 'wall' || face.leg === 'B') return 0;
+  const height = valanceHeight(edition.shop, underLight.height, underLight.lip);
+  return (made.lightRail?.height ?? 0) >= height ? 0 : height;
 }
 
 /** Of a folding corner's two leaves the free one is pulled. */

@@ -1,10 +1,9 @@
-import { applyChange, find, optionsOf, reach } from './choices';
+import { applyChange, chosen, optionsOf, reach } from './choices';
 import type { Edition, Terms } from './edition-types';
-import { lineDrafts, sumOf } from './price';
 import { quantities } from './quantities';
+import { revealFaults, type RevealFault } from './reveals';
 import { totalAfresh, totalOf, type EngineInput } from './takeoff';
 import {
-  CHOICE_KEYS,
   ZONES,
   type Cents,
   type ChoiceChange,
@@ -16,16 +15,36 @@ import {
   type ZoneOrKitchen,
 } from './types';
 import { cents } from './money';
-import { chosen } from './choices';
+import { inch } from './words';
 
 /** Zones that a survey has; choices in others change nothing. */
 export const zonesIn = (survey: Survey): readonly Zone[] =>
   ZONES.filter((zone) => survey.cabinets.some((cabinet) => cabinet.zone === zone));
 
-/** Fronts that cannot be made or hung: what an overlay or a crown must not add to. */
-function blockedIn(input: EngineInput): number {
-  const { sums } = quantities(input.survey, input.edition, input.choices);
-  return ZONES.reduce((sum, zone) => sum + sums[zone].blocked, 0);
+/** What an overlay or a crown must not add to in this kitchen. */
+interface Obstacles {
+  readonly blocked: number;
+  readonly reveals: readonly RevealFault[];
+}
+
+function obstacles(input: EngineInput, key: ChoiceKey): Obstacles | null {
+  if (key !== 'overlay' && key !== 'crown') return null;
+  const q = quantities(input.survey, input.edition, input.choices);
+  return {
+    blocked: ZONES.reduce((sum, zone) => sum + q.sums[zone].blocked, 0),
+    reveals: key === 'overlay' ? revealFaults(q) : [],
+  };
+}
+
+/** Why an overlay or a crown cannot be built in this kitchen, though it goes together with the rest. */
+function hindrance(now: Obstacles | null, then: Obstacles | null): string | null {
+  if (!now || !then) return null;
+  if (then.reveals.length > now.reveals.length) {
+    const largest = Math.min(...then.reveals.map((fault) => fault.largest));
+    return `The frames are too narrow for it: the largest overlay that can be built here is ${inch(largest)}.`;
+  }
+  if (then.blocked > now.blocked) return 'Some fronts could then not be made or hung.';
+  return null;
 }
 
 /**
@@ -35,6 +54,7 @@ function blockedIn(input: EngineInput): number {
 export function options(input: EngineInput, key: ChoiceKey, zone: ZoneOrKitchen): OptionState[] {
   const { edition, choices } = input;
   const now = totalOf(input);
+  const present = obstacles(input, key);
   const isChosen = (id: string): boolean =>
     zone === 'kitchen'
       ? choices.kitchen[key] === id && ZONES.every((one) => chosen(choices, key, one) === id)
@@ -55,12 +75,16 @@ export function options(input: EngineInput, key: ChoiceKey, zone: ZoneOrKitchen)
         ...(reached.reason ? { reason: reached.reason } : {}),
         ...(reached.nearest ? { nearest: reached.nearest } : {}),
       };
+    const wanted = { ...input, choices: reached.choices };
+    const reason = present && hindrance(present, obstacles(wanted, key));
+    if (reason)
+      return { id, name, chosen: false, availability: 'notAvailable', delta: null, swaps: [], reason };
     return {
       id,
       name,
       chosen: false,
       availability: reached.availability,
-      delta: cents(totalOf({ ...input, choices: reached.choices }) - now),
+      delta: cents(totalOf(wanted) - now),
       swaps: reached.swaps,
       ...(reached.reason ? { reason: reached.reason } : {}),
     };

@@ -80,10 +80,10 @@ function kept<T>(memory: Map<string, T>, key: string, compute: () => T): T {
   return made;
 }
 
-/** What a zone's fronts, fillers and hinges depend on. */
+/** What a zone's fronts, fillers and hinges depend on; the zone too, which has its own faces. */
 const frontKey = (made: MadeByZone, zone: Zone): string => {
-  const { style, species, overlay, crown, base } = made[zone];
-  return `${zone} ${style.id} ${species.id} ${overlay.id} ${crown?.id ?? ''} ${base?.id ?? ''}`;
+  const { style, species, overlay, crown, base, lightRail } = made[zone];
+  return `${zone} ${style.id} ${species.id} ${overlay.id} ${crown?.id ?? ''} ${base?.id ?? ''} ${lightRail?.id ?? ''}`;
 };
 
 /** Throws `EngineError` for an option that the edition does not have. */
@@ -148,7 +148,7 @@ const NOTHING: ZoneSum = {
   blocked: 0,
 };
 
-const asItIs = (face: Face): FaceMeasure => ({ face, openings: [], crown: null, ...NOTHING });
+const asItIs = (face: Face): FaceMeasure => ({ face, openings: [], crown: null, valance: 0, ...NOTHING });
 
 const addUp = (sum: ZoneSum, one: FaceMeasure): ZoneSum => ({
   fiveArea: sum.fiveArea + one.fiveArea,

@@ -19,7 +19,6 @@ import {
 } from './types';
 import { adhesiveGallons, veneerStrips } from './veneer';
 import { wordedLine } from './words';
-import { valanceHeight } from './crown';
 
 /** What a takeoff is computed from. */
 export interface EngineInput {
@@ -44,7 +43,7 @@ export function takeoff(survey: Survey, edition: Edition, choices: Choices, term
   const bondedArea = bondedHundredths(q);
   return {
     fronts: frontsOf(q),
-    fillers: fillersOf(q, edition),
+    fillers: fillersOf(q),
     veneer: veneerStrips(q.faces, q.measures, q.made, edition),
     mouldings: mouldingsOf(q),
     panels,
@@ -111,9 +110,9 @@ function frontsOf(q: Quantities): Front[] {
   return fronts;
 }
 
-function fillersOf(q: Quantities, edition: Edition): FillerStrip[] {
+function fillersOf(q: Quantities): FillerStrip[] {
   const strips: FillerStrip[] = [];
-  for (const { face, openings } of q.measures) {
+  for (const { face, openings, valance } of q.measures) {
     const { cabinet } = face;
     const leg = face.leg === 'B' ? 'B' : '';
     for (const { mark, placed, crownFiller, baseFiller } of openings) {
@@ -124,17 +123,13 @@ function fillersOf(q: Quantities, edition: Edition): FillerStrip[] {
       if (baseFiller > 0)
         strips.push({ ...shared, mark: `${mark}${leg}-FB`, height: baseFiller, reason: 'base' });
     }
-    const { underLight } = cabinet;
-    const { lightRail } = q.made[cabinet.zone];
-    if (!underLight || !face.renewed || cabinet.tier !== 'wall' || face.leg === 'B') continue;
-    const height = valanceHeight(edition.shop, underLight.height, underLight.lip);
-    if (height > 0 && (lightRail?.height ?? 0) < height)
+    if (valance > 0)
       strips.push({
         mark: `${cabinet.id}-V`,
         opening: cabinet.id,
         zone: cabinet.zone,
         width: sixtyfourths(Math.floor(face.width / 4) * 4),
-        height,
+        height: sixtyfourths(valance),
         reason: 'valance',
       });
   }

@@ -253,6 +253,8 @@ export interface PriceLine {
   readonly parts: readonly string[];
   /** Why it is so much, in one sentence. */
   readonly because: string;
+  /** Id of the option or labour rate that it pays for. */
+  readonly option?: string;
 }
 
 export type Severity = 'information' | 'addsWork' | 'cannotBeBuilt';
@@ -269,7 +271,12 @@ export interface FitNote {
   /** What the note adds to the price, when it adds work. */
   readonly amount?: Cents;
   /** Changes that would clear it. */
-  readonly wayOut?: { readonly label: string; readonly changes: readonly ChoiceChange[] };
+  readonly wayOut?: {
+    readonly label: string;
+    readonly changes: readonly ChoiceChange[];
+    /** Total after it less the total now. */
+    readonly delta?: Cents;
+  };
 }
 
 export type Availability = 'available' | 'availableWithSwap' | 'notAvailable';

@@ -80,6 +80,7 @@ export function wordedLine(draft: LineDraft, q: Quantities, edition: Edition): P
     amount,
     parts,
     because,
+    option: draft.option,
   };
 }
 

@@ -262,9 +262,9 @@ export const ternHollowEdition: Edition = {
   labour: [
     rate('survey', 'Final measure and protection of the rooms', 'job', 'lump', 800, 760),
     rate('delivery', 'Delivery and disposal', 'job', 'lump', 300, 540, 'other'),
-    rate('hang', 'Hanging fronts', 'front', 'each', 45, 46),
+    rate('hang', 'Hanging fronts', 'front', 'each', 45, 58),
     rate('bore', 'Boring for hinges', 'hinge', 'each', 6, 4.6),
-    rate('veneer', 'Preparing frames and laying veneer', 'veneerArea', 'squareFoot', 48, 54),
+    rate('veneer', 'Preparing frames and laying veneer', 'veneerArea', 'squareFoot', 48, 64),
     rate('mouldings', 'Cutting and fixing mouldings', 'mouldingFoot', 'foot', 12, 12.5),
     rate('nailer', 'Nailers behind the crown', 'nailerFoot', 'foot', 5, 4.6),
     rate('fillers', 'Filler strips in openings', 'fillerStrip', 'each', 25, 27),

@@ -50,16 +50,16 @@ const style = (id: string, name: string, about: string, own: Own): DoorStyle => 
 /** Our own plain names; figures of construction and prices are invented, within what is ordinary. */
 export const STYLES: readonly DoorStyle[] = [
   style('square-flat-panel', 'Square flat panel', 'Four square-edged pieces round a flat panel.', {
-    price: dollars(71.5),
-    slabPrice: dollars(59),
+    price: dollars(86),
+    slabPrice: dollars(71),
   }),
   style('narrow-flat-panel', 'Narrow flat panel', 'The same with slim stiles and rails.', {
     stile: inches(1.5),
     rail: inches(1.5),
     drawerRail: inches(1.125),
     smallestDrawerHeight: inches(4.5),
-    price: dollars(79),
-    slabPrice: dollars(62),
+    price: dollars(95),
+    slabPrice: dollars(74.5),
   }),
   style('broad-flat-panel', 'Broad flat panel', 'Wide stiles and rails with a beveled inner edge.', {
     stile: inches(3),
@@ -68,21 +68,21 @@ export const STYLES: readonly DoorStyle[] = [
     innerEdge: BEVEL_IN,
     outerEdge: EASED_OUT,
     smallestDrawerHeight: inches(6),
-    price: dollars(75),
-    slabPrice: dollars(59),
+    price: dollars(90),
+    slabPrice: dollars(71),
   }),
   style('stepped-flat-panel', 'Stepped flat panel', 'A small step runs round the panel.', {
     stile: inches(2.5),
     rail: inches(2.5),
     innerEdge: OGEE_IN,
     outerEdge: EASED_OUT,
-    price: dollars(80.5),
-    slabPrice: dollars(62),
+    price: dollars(96.5),
+    slabPrice: dollars(74.5),
   }),
   style('beaded-frame-flat-panel', 'Beaded frame, flat panel', 'A fine bead inside the frame.', {
     innerEdge: BEAD_IN,
-    price: dollars(88.5),
-    slabPrice: dollars(63.5),
+    price: dollars(106),
+    slabPrice: dollars(76),
   }),
   style('raised-square-panel', 'Raised square panel', 'A solid panel that rises towards the middle.', {
     panel: 'raised',
@@ -96,8 +96,8 @@ export const STYLES: readonly DoorStyle[] = [
     panelProfile: RAISED,
     smallestPanel: inches(3),
     smallestDrawerHeight: inches(6.5),
-    price: dollars(91.5),
-    slabPrice: dollars(65),
+    price: dollars(110),
+    slabPrice: dollars(78),
     species: [
       'red-oak',
       'red-maple',
@@ -114,8 +114,8 @@ export const STYLES: readonly DoorStyle[] = [
     innerEdge: SQUARE_IN,
     panelProfile: BEADED,
     plankWidth: inches(2),
-    price: dollars(85),
-    slabPrice: dollars(62),
+    price: dollars(102),
+    slabPrice: dollars(74.5),
     species: ['red-oak', 'red-maple', 'sugar-maple', 'red-alder', 'paint-grade'],
   }),
   style('upright-planks', 'Upright planks', 'Boards side by side, held from behind.', {
@@ -127,8 +127,8 @@ export const STYLES: readonly DoorStyle[] = [
     innerEdge: NONE,
     panelProfile: NONE,
     widestLeaf: inches(21),
-    price: dollars(83.5),
-    slabPrice: dollars(83.5),
+    price: dollars(100),
+    slabPrice: dollars(100),
     species: ['red-oak', 'hickory', 'red-alder', 'red-maple', 'black-walnut'],
   }),
   style('plain-slab', 'Plain slab', 'One flat face, edges square.', {
@@ -137,8 +137,8 @@ export const STYLES: readonly DoorStyle[] = [
     panelThickness: inches(0.75),
     innerEdge: NONE,
     panelProfile: NONE,
-    price: dollars(60.5),
-    slabPrice: dollars(60.5),
+    price: dollars(72.5),
+    slabPrice: dollars(72.5),
   }),
   style('eased-slab', 'Eased slab', 'One flat face with softened edges, pressed in film.', {
     construction: 'slab',
@@ -147,8 +147,8 @@ export const STYLES: readonly DoorStyle[] = [
     innerEdge: NONE,
     panelProfile: NONE,
     outerEdge: EASED_OUT,
-    price: dollars(51),
-    slabPrice: dollars(51),
+    price: dollars(61),
+    slabPrice: dollars(61),
     species: ['foil', 'paint-grade'],
   }),
 ];
