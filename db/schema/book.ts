@@ -11,13 +11,13 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 import type { Choices } from '@/lib/engine/types';
+import { PAGE_KINDS } from '@/lib/contracts/page';
 import { CHANGE_ORDER_STATES } from '@/lib/contracts/states';
 import { companyId, createdAt, instant, policies, rowId } from './columns';
 import { editions, jobs, surveys } from './job';
 import { people } from './person';
 import { schemes } from './scheme';
 
-export const PAGE_KINDS = ['agreement', 'changeOrder', 'cancellation', 'measureRevision'] as const;
 
 /** A difference asked for after signing. */
 export const changeOrders = pgTable(

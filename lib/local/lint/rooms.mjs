@@ -12,7 +12,7 @@ export const ROOMS = [
     imports: ['db', 'lib/services', 'lib/adapters', 'lib/engine', 'lib/record', 'lib/contracts', 'lib/paths'],
   },
   { room: 'lib/engine', imports: [] },
-  { room: 'lib/record', imports: [], types: ['lib/engine', 'lib/contracts'] },
+  { room: 'lib/record', imports: ['lib/contracts'], types: ['lib/engine'] },
   // Beside types: how a length is read, and the lists of keys and zones.
   { room: 'lib/contracts', imports: ['lib/engine/length', 'lib/engine/types'], types: ['lib/engine'] },
   { room: 'lib/paths', imports: [] },
