@@ -76,7 +76,9 @@ export function counterPlaces(survey: Survey, faces: readonly Face[], made: Made
     groups.forEach((group, index) => {
       const first = group[0];
       const last = group[group.length - 1];
-      const zone = group.find((span) => span.zone !== null)?.zone;
+      const zones = group.flatMap((span) => (span.zone === null ? [] : [span.zone]));
+      // A peninsula's counter is its own, though it begins on a corner cabinet of the base run.
+      const zone = zones.includes('island') ? 'island' : zones[0];
       if (!first || !last || !zone) return;
       const { counter } = made[zone];
       const over = counter.overhang;
