@@ -1,12 +1,12 @@
 import { readFileSync } from 'node:fs';
 import { parseArgs } from 'node:util';
-import { ternHollowEdition } from '@/db/seed/scenario/edition';
 import { choicesShape } from '@/lib/contracts/choices';
 import { parseEdition } from '@/lib/contracts/edition';
 import { faultsOf } from '@/lib/contracts/faults';
 import { parseSurvey } from '@/lib/contracts/survey';
 import { termsShape } from '@/lib/contracts/terms';
-import { slackOn } from '@/lib/engine/closing';
+import { openSums, planFaults, slackOn } from '@/lib/engine/closing';
+import { facesOf } from '@/lib/engine/faces';
 import type { Edition, Terms } from '@/lib/engine/edition-types';
 import { doorOrder, EngineError, optionsOf, takeoff, unfoldTotal } from '@/lib/engine/index';
 import { formatLength, sixtyfourths } from '@/lib/engine/length';
@@ -24,7 +24,10 @@ const OUTPUTS = ['doors', 'mouldings', 'veneer', 'panels', 'boxes', 'price', 'no
 type Output = (typeof OUTPUTS)[number];
 
 const USAGE = `npm run -s takeoff -- SURVEY.json [--edition FILE] [--scheme FILE] [--terms FILE] [--out ${OUTPUTS.join('|')}]
-Without an edition the demo’s price book is taken, without a scheme the first option of every key. Ends with 2 when a file has faults, told by path.`;
+Without an edition the survey alone is checked; without a scheme the first option of every key is taken. Ends with 2 when a file has faults, told by path.`;
+
+/** Thickness of an end panel where no edition says it: a quarter inch. */
+const PANEL = 16;
 
 /** No discount and no tax, for a look at the bench. */
 const PLAIN_TERMS: Terms = {
@@ -237,6 +240,23 @@ function show(out: Output, taken: Takeoff, survey: Survey, edition: Edition): st
   }
 }
 
+/** What does not add up in a survey, with end panels of a quarter inch. */
+function closingOf(survey: Survey): string[] {
+  const faces = facesOf(survey);
+  const length = (value: number) => `${formatLength(sixtyfourths(Math.round(value)))} in`;
+  return [
+    ...faces
+      .flatMap(openSums)
+      .map(
+        (open) =>
+          `${open.cabinet}: the ${open.along} of opening ${open.openings.join(', ')} comes to ${length(open.sum)}, the frame is ${length(open.should)}`,
+      ),
+    ...planFaults(survey, faces, PANEL).map(
+      (fault) => `Wall ${fault.wall}: ${fault.ids.join(' and ')}, ${fault.kind}, by ${length(fault.by)}`,
+    ),
+  ];
+}
+
 function run(): number {
   const { values, positionals } = parseArgs({
     allowPositionals: true,
@@ -255,8 +275,12 @@ function run(): number {
     return values.help ? 0 : 2;
   }
   const survey = readSurvey(file);
-  // Without a file the demo's price book serves, so that a survey can be looked at alone.
-  const edition = values.edition === undefined ? ternHollowEdition : readEdition(values.edition);
+  if (values.edition === undefined) {
+    const found = closingOf(survey);
+    console.log(found.length === 0 ? 'The survey closes.' : found.join('\n'));
+    return 0;
+  }
+  const edition = readEdition(values.edition);
   const choices = values.scheme === undefined ? firstChoices(edition) : readChoices(values.scheme);
   const terms = values.terms === undefined ? PLAIN_TERMS : readTerms(values.terms);
   console.log(show(out, takeoff(survey, edition, choices, terms), survey, edition));
