@@ -32,6 +32,7 @@ export function OfferPanel({
   initial,
   viewer,
   what,
+  closed = false,
 }: {
   company: string;
   jobId: string;
@@ -39,13 +40,15 @@ export function OfferPanel({
   viewer: Viewer;
   /** Such as `this agreement`. */
   what: string;
+  /** Nothing more can be signed on it. */
+  closed?: boolean;
 }) {
   const [shown, setShown] = useState(initial);
   const [fault, setFault] = useState<string | null>(null);
   const [moved, setMoved] = useState(false);
   const { data, mutate } = useSWR<OfferView>(paths.api.offer(company, jobId, shown.id), readJson, {
     fallbackData: shown,
-    refreshInterval: (latest) => (latest?.state === 'current' ? WAIT_MS : 0),
+    refreshInterval: (latest) => (latest?.state === 'current' && !closed ? WAIT_MS : 0),
   });
   const offer = data?.id === shown.id ? data : shown;
   const own = offer.signatures.some((one) => one.personId === viewer.personId);
@@ -105,7 +108,7 @@ export function OfferPanel({
         <Signatures offer={offer} />
         {offer.state === 'sealed' ? (
           <Sealed company={company} jobId={jobId} offer={offer} />
-        ) : own ? (
+        ) : own && !closed ? (
           <Notice kind="info" title="You have signed">
             {offer.body.kind === 'changeOrder' && offer.missing.length === 0
               ? 'The contractor decides next. You will get a mail, and this page shows it.'
@@ -113,6 +116,7 @@ export function OfferPanel({
           </Notice>
         ) : (
           required &&
+          !closed &&
           offer.state === 'current' && (
             <div className="mt-5">
               <SignForm

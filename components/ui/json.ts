@@ -21,7 +21,19 @@ function faultOf(body: unknown): Fault {
     code: isCode(code) ? code : 'unavailable',
     sentence: typeof sentence === 'string' ? sentence : LATER,
     detail: Reflect.get(fault, 'detail'),
+    faults: faultsOf(Reflect.get(fault, 'faults')),
   };
+}
+
+/** Faults of single fields, where the answer names any. */
+function faultsOf(list: unknown): Fault['faults'] {
+  if (!Array.isArray(list)) return undefined;
+  return list.flatMap((one: unknown) => {
+    if (typeof one !== 'object' || one === null) return [];
+    const path: unknown = Reflect.get(one, 'path');
+    const message: unknown = Reflect.get(one, 'message');
+    return typeof path === 'string' && typeof message === 'string' ? [{ path, message }] : [];
+  });
 }
 
 let renew: (() => Promise<boolean>) | null = null;

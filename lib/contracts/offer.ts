@@ -86,6 +86,8 @@ export const offerBodyShape = z.strictObject({
   stays: sentences,
   responsibilities: z.array(z.strictObject({ title: z.string(), text: z.string() })),
   place: z.strictObject({ sale: z.string(), language: z.string() }),
+  /** The calendar date where the company is, from which the dates in the notices are computed. */
+  preparedOn: z.iso.date(),
   dates: sentences,
   notices: z.array(
     z.strictObject({

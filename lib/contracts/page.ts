@@ -67,3 +67,8 @@ export const bookFileShape = z.strictObject({
   ),
 });
 export type BookFile = z.infer<typeof bookFileShape>;
+
+export const pageReferenceShape = z.object({
+  jobId: z.uuid(),
+  sequence: z.number().int().positive().max(10_000),
+});

@@ -78,6 +78,8 @@ export async function issueInvitation(actor: Actor, input: unknown): Promise<Res
           isNull(invitations.revokedAt),
         ),
       );
+    // The invited are people from now on, so that a page can name them before they come.
+    await tx.insert(people).values({ companyId, email, name }).onConflictDoNothing();
     const { token, hash } = newToken();
     const [row] = await tx
       .insert(invitations)
