@@ -22,6 +22,8 @@ export default defineConfig({
     viewport: { width: 1440, height: 900 },
     locale: 'en-US',
     timezoneId: 'America/New_York',
+    actionTimeout: 30_000,
+    navigationTimeout: 60_000,
     trace: 'retain-on-failure',
     screenshot: 'only-on-failure',
     launchOptions: {

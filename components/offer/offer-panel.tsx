@@ -32,6 +32,7 @@ export function OfferPanel({
   initial,
   viewer,
   what,
+  timeZone,
   closed = false,
 }: {
   company: string;
@@ -40,6 +41,8 @@ export function OfferPanel({
   viewer: Viewer;
   /** Such as `this agreement`. */
   what: string;
+  /** Where the company is; moments are told by its clock. */
+  timeZone: string;
   /** Nothing more can be signed on it. */
   closed?: boolean;
 }) {
@@ -105,7 +108,7 @@ export function OfferPanel({
       )}
       <OfferDocument body={offer.body} />
       <Panel title="Signatures">
-        <Signatures offer={offer} />
+        <Signatures offer={offer} timeZone={timeZone} />
         {offer.state === 'sealed' ? (
           <Sealed company={company} jobId={jobId} offer={offer} />
         ) : own && !closed ? (
@@ -140,7 +143,8 @@ export function OfferPanel({
   );
 }
 
-function Signatures({ offer }: { offer: OfferView }) {
+function Signatures({ offer, timeZone }: { offer: OfferView; timeZone: string }) {
+  const moment = new Intl.DateTimeFormat('en-US', { dateStyle: 'long', timeStyle: 'short', timeZone });
   return (
     <ul className="grid gap-1">
       {offer.body.requiredSigners.map((signer) => {
@@ -152,9 +156,7 @@ function Signatures({ offer }: { offer: OfferView }) {
           >
             <span className="font-semibold">{signer.name}</span>
             <span className={signed ? undefined : 'text-quiet'}>
-              {signed
-                ? `signed ${new Date(signed.signedAt).toLocaleString('en-US', { dateStyle: 'long', timeStyle: 'short' })}`
-                : 'not signed yet'}
+              {signed ? `signed ${moment.format(new Date(signed.signedAt))}` : 'not signed yet'}
             </span>
           </li>
         );

@@ -20,12 +20,14 @@ export function ReviewScreen({
   jobId,
   schemeId,
   viewer,
+  timeZone,
   contact,
 }: {
   company: string;
   jobId: string;
   schemeId: string;
   viewer: Viewer;
+  timeZone: string;
   contact: { readonly name: string; readonly phone: string };
 }) {
   const [offer, setOffer] = useState<OfferView | null>(null);
@@ -59,7 +61,14 @@ export function ReviewScreen({
       <PageTitle about="Read all of it, then sign at the foot. Nothing is agreed before everyone has signed.">
         Review and sign
       </PageTitle>
-      <OfferPanel company={company} jobId={jobId} initial={offer} viewer={viewer} what="this agreement" />
+      <OfferPanel
+        company={company}
+        jobId={jobId}
+        initial={offer}
+        viewer={viewer}
+        timeZone={timeZone}
+        what="this agreement"
+      />
     </>
   );
 }

@@ -42,6 +42,7 @@ export default async function ReviewPage({
       jobId={jobId}
       schemeId={scheme.id}
       viewer={{ personId: actor.personId, name: actor.name, role: actor.role }}
+      timeZone={company.timeZone}
       contact={contact}
     />
   );

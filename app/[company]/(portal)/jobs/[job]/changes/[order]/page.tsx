@@ -1,4 +1,5 @@
 import { notFound } from 'next/navigation';
+import { readCompany } from '@/app/[company]/read-company';
 import { requireActor } from '@/app/[company]/visitor';
 import { WithdrawButton } from '@/components/change-order/withdraw-button';
 import { OfferPanel } from '@/components/offer/offer-panel';
@@ -16,6 +17,8 @@ export default async function ChangePage({
   params: Promise<{ company: string; job: string; order: string }>;
 }) {
   const { company, job: jobId, order: orderId } = await params;
+  const contractor = await readCompany(company);
+  if (!contractor) notFound();
   const actor = await requireActor(company, jobId);
   const order = await readChangeOrder(actor, { jobId, orderId });
   if (!order.ok) notFound();
@@ -45,6 +48,7 @@ export default async function ChangePage({
         initial={offer}
         viewer={{ personId: actor.personId, name: actor.name, role: actor.role }}
         what="this change order"
+        timeZone={contractor.timeZone}
         closed={state === 'declined' || state === 'withdrawn'}
       />
     </>
