@@ -64,7 +64,7 @@ function verify(book: string): { code: number; output: string } {
   try {
     const output = execFileSync('npm', ['run', '-s', 'verify-book', '--', file], {
       encoding: 'utf8',
-      env: { PATH: process.env.PATH, HOME: process.env.HOME },
+      env: { NODE_ENV: 'test', PATH: process.env.PATH, HOME: process.env.HOME },
     });
     return { code: 0, output };
   } catch (error) {
