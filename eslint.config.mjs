@@ -38,6 +38,11 @@ const config = [
     },
   },
   {
+    // Cameras, lights and renderers are objects of three, which are changed in place.
+    files: ['components/scene/**'],
+    rules: { 'react-hooks/immutability': 'off' },
+  },
+  {
     // The browser tests' fixtures are handed on by a function called `use`, which is no hook.
     files: ['tests/**', 'lib/local/**'],
     rules: { 'react-hooks/rules-of-hooks': 'off' },

@@ -1,5 +1,6 @@
 'use client';
 
+import dynamic from 'next/dynamic';
 import { useCallback, useMemo, useState } from 'react';
 import useSWR from 'swr';
 import { PriceTape } from '@/components/price-tape/price-tape';
@@ -7,10 +8,11 @@ import { Button, ButtonLink } from '@/components/ui/button';
 import { readJson } from '@/components/ui/json';
 import { LengthText } from '@/components/ui/length';
 import { Notice } from '@/components/ui/notice';
+import { Skeleton } from '@/components/ui/skeleton';
 import { CallLine } from '@/components/ui/states';
 import type { KitchenView, SchemeView } from '@/lib/contracts/scheme';
 import { formatCents } from '@/lib/engine/money';
-import type { ChoiceChange, Choices, OptionState, ZoneOrKitchen } from '@/lib/engine/types';
+import type { ChoiceChange, Choices, Massing, OptionState, ZoneOrKitchen } from '@/lib/engine/types';
 import { paths } from '@/lib/paths';
 import { AllChoices } from './all-choices';
 import { AskForChange } from './ask-for-change';
@@ -41,6 +43,16 @@ import { kept, shown } from './scheme-sync';
 import { useOptions } from './use-options';
 import { editId, storedOf, useScheme } from './use-scheme';
 import { WallNavigation } from './wall-navigation';
+
+// Three comes after the page can be used; until then its place is a calm field.
+const RoomView = dynamic(() => import('@/components/scene/room-view'), {
+  ssr: false,
+  loading: () => <Skeleton className="size-full" />,
+});
+
+/** The place of the front with a mark; the whole kitchen when it has none. */
+const zoneOf = (room: Massing, mark: string): ZoneOrKitchen =>
+  room.fronts.find((front) => front.mark === mark)?.zone ?? 'kitchen';
 
 const firstName = (name: string): string => name.split(' ')[0] ?? name;
 
@@ -217,7 +229,16 @@ function OneScheme({
         edition={edition}
         wall={wall}
         words={words}
-        room={null}
+        room={(station, otherwise) => (
+          <RoomView
+            massing={room}
+            edition={edition}
+            station={station}
+            label={words.join(' ')}
+            onPick={(mark) => pickPart('doors', zoneOf(room, mark), mark)}
+            fallback={otherwise}
+          />
+        )}
         onWall={setWall}
         onPart={pickPart}
         tools={

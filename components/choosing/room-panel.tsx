@@ -7,6 +7,9 @@ import { WallDrawing, type PickPart } from './wall-drawing';
 
 type View = 'room' | 'wall';
 
+/** The station from which all of the room is seen. */
+const WHOLE = 'room';
+
 /** The picture of the kitchen: room view or drawn wall, the scheme's tools above, what was found about it beneath. */
 export function RoomPanel({
   walls,
@@ -24,22 +27,38 @@ export function RoomPanel({
   wall: string;
   /** The picture in words. */
   words: readonly string[];
-  /** The room in three dimensions; absent where it cannot be drawn. */
-  room: ReactNode | null;
+  /** The room in three dimensions from a station: a wall's id, or `room` for all of it. */
+  room: (station: string, otherwise: ReactNode) => ReactNode;
   onWall: (wall: string) => void;
   onPart: PickPart;
   tools: ReactNode;
   foot: ReactNode;
 }) {
-  const [wanted, setView] = useState<View>('room');
-  const view = room === null ? 'wall' : wanted;
+  const [view, setView] = useState<View>('room');
+  // The whole room is shown until somebody turns to a wall, here or on the strip.
+  const [whole, setWhole] = useState<{ readonly of: string } | null>({ of: wall });
+  const station = view === 'room' && whole?.of === wall ? WHOLE : wall;
   const shown = walls.find((one) => one.wall.id === wall) ?? walls[0];
 
   function turn(by: -1 | 1) {
-    const index = walls.findIndex((one) => one === shown);
-    const next = walls[(index + by + walls.length) % walls.length];
-    if (next) onWall(next.wall.id);
+    const stations =
+      view === 'room' ? [WHOLE, ...walls.map((one) => one.wall.id)] : walls.map((one) => one.wall.id);
+    const next = stations[(stations.indexOf(station) + by + stations.length) % stations.length];
+    if (next === undefined) return;
+    setWhole(next === WHOLE ? { of: wall } : null);
+    if (next !== WHOLE) onWall(next);
   }
+
+  const drawing = shown && (
+    <WallDrawing
+      elevation={shown}
+      edition={edition}
+      material
+      inked={null}
+      onPart={onPart}
+      className="absolute inset-0 size-full p-2 md:p-4"
+    />
+  );
 
   return (
     <section
@@ -48,25 +67,12 @@ export function RoomPanel({
     >
       <div className="flex min-w-0 items-center gap-x-1 border-b border-hairline px-1 md:gap-x-3 md:px-4">
         {tools}
-        {room !== null && <ViewSwitch view={view} onView={setView} />}
+        <ViewSwitch view={view} onView={setView} />
       </div>
       <figure className="relative min-w-0">
-        {view === 'room' ? (
-          <div className="absolute inset-0">{room}</div>
-        ) : (
-          shown && (
-            <WallDrawing
-              elevation={shown}
-              edition={edition}
-              material
-              inked={null}
-              onPart={onPart}
-              className="absolute inset-0 size-full p-2 md:p-4"
-            />
-          )
-        )}
+        {view === 'room' ? <div className="absolute inset-0">{room(station, drawing)}</div> : drawing}
         <figcaption className="sr-only">{words.join(' ')}</figcaption>
-        {walls.length > 1 && shown && (
+        {walls.length > 0 && (
           <div className="pointer-events-none absolute inset-x-1 top-1/2 flex -translate-y-1/2 justify-between">
             <TurnButton by={-1} onTurn={turn} />
             <TurnButton by={1} onTurn={turn} />
@@ -82,7 +88,7 @@ function TurnButton({ by, onTurn }: { by: -1 | 1; onTurn: (by: -1 | 1) => void }
   return (
     <button
       type="button"
-      aria-label={by < 0 ? 'Turn to the wall on the left' : 'Turn to the wall on the right'}
+      aria-label={by < 0 ? 'Turn to the left' : 'Turn to the right'}
       onClick={() => onTurn(by)}
       className="pointer-events-auto grid size-11 place-items-center rounded-frame text-quiet hover:text-ink"
     >

@@ -255,7 +255,8 @@ function pullOn(
   if (pull.form === 'none') return null;
   if (front.kind === 'falseFront' && placed.opening.kind !== 'tiltOut') return null;
   if (placed.opening.kind === 'cornerFold' && !isPulled(face, placed)) return null;
-  const middle = { x: sixtyfourths(Math.round(front.width / 2)), upright: false };
+  const { id } = pull;
+  const middle = { id, x: sixtyfourths(Math.round(front.width / 2)), upright: false };
   if (front.kind === 'appliancePanel')
     return { ...middle, y: sixtyfourths(Math.max(0, front.height - PULL_END)) };
   if (front.kind !== 'door') return { ...middle, y: sixtyfourths(Math.round(front.height / 2)) };
@@ -267,7 +268,7 @@ function pullOn(
   const atFoot = Math.min(reach, Math.round(front.height / 2));
   const atHead = Math.max(front.height - reach, Math.round(front.height / 2));
   const y = lower >= HAND_HEIGHT ? atFoot : Math.min(atHead, Math.max(HAND_HEIGHT - lower, atFoot));
-  return { x: sixtyfourths(x), y: sixtyfourths(y), upright: pull.form !== 'cup' };
+  return { id, x: sixtyfourths(x), y: sixtyfourths(y), upright: pull.form !== 'cup' };
 }
 
 /** A folding corner's free leaf is pulled at the edge that meets the stile. */

@@ -502,7 +502,12 @@ export interface MassingFront extends Solid {
   readonly hinge: 'left' | 'right' | 'none';
   readonly material: Material | null;
   /** Centre of the pull on the front face, from its lower left corner; `null` on fixed panels. */
-  readonly pull: { readonly x: Sixtyfourths; readonly y: Sixtyfourths; readonly upright: boolean } | null;
+  readonly pull: {
+    readonly id: string;
+    readonly x: Sixtyfourths;
+    readonly y: Sixtyfourths;
+    readonly upright: boolean;
+  } | null;
 }
 
 export interface MassingSolid extends Solid {

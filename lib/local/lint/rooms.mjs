@@ -4,7 +4,7 @@
  */
 export const ROOMS = [
   { room: 'app', imports: ['components', 'lib/services', 'lib/contracts', 'lib/paths'] },
-  { room: 'components', imports: ['lib/engine', 'lib/contracts', 'lib/paths'] },
+  { room: 'components', imports: ['components/scene', 'lib/engine', 'lib/contracts', 'lib/paths'] },
   { room: 'components/scene', imports: ['components', 'lib/engine', 'lib/contracts', 'lib/paths'] },
   { room: 'db', imports: ['lib/contracts'], types: ['lib/engine'] },
   {
