@@ -43,7 +43,7 @@ export function BookPages({
                 </p>
               </div>
               <p className="text-right">
-                {page.kind === 'changeOrder' && <Difference cents={page.thisPageCents} than="" />}
+                {page.kind === 'changeOrder' && <Difference cents={page.thisPageCents} />}
                 <span className="block font-title text-part font-semibold">
                   <Money cents={page.sumAfterCents} />
                 </span>

@@ -22,7 +22,7 @@ export function DeskFrame({
   children: ReactNode;
 }) {
   return (
-    <Frame className="grid-rows-[auto_1fr_auto]">
+    <Frame className="grid-rows-[auto_1fr_auto] [&:has([data-wide])>footer]:hidden">
       <header className="flex flex-wrap items-center gap-x-5 rounded-frame border border-hairline bg-panel px-3 md:px-5 print:hidden">
         <Link
           href={paths.desk(company.slug)}
@@ -50,9 +50,9 @@ export function DeskFrame({
       <main id="main" className="grid content-start gap-frame has-[[data-wide]]:content-stretch">
         {children}
       </main>
-      <div className="print:hidden">
+      <footer className="print:hidden">
         <SignedInAs />
-      </div>
+      </footer>
     </Frame>
   );
 }

@@ -90,7 +90,7 @@ function ChangeScope({ body }: { body: OfferBody }) {
         <Sum label="Original sum">{<Money cents={body.sum.originalCents} />}</Sum>
         <Sum label="Change orders before this one">{<Money cents={body.sum.previousOrdersCents} />}</Sum>
         <Sum label="Sum before this change">{<Money cents={body.sum.beforeCents} />}</Sum>
-        <Sum label="This change">{<Difference cents={body.sum.thisPageCents} than="" />}</Sum>
+        <Sum label="This change">{<Difference cents={body.sum.thisPageCents} />}</Sum>
         <Sum label="New sum" strong>
           {<Money cents={body.sum.afterCents} />}
         </Sum>
@@ -154,7 +154,9 @@ function Lines({ body }: { body: OfferBody }) {
               </div>
             </Td>
             <Td>{zoneWord(line.zone)}</Td>
-            <Td numeric>{line.quantityText}</Td>
+            <Td numeric className="whitespace-nowrap">
+              {line.quantityText}
+            </Td>
             <Td numeric>
               <Money cents={line.amountCents} />
             </Td>

@@ -95,7 +95,7 @@ export function OfferPanel({
             {offer.differences.map((one) => (
               <li key={one.text} className="flex flex-wrap justify-between gap-x-5">
                 <span>{one.text}</span>
-                {one.amountCents !== undefined && <Difference cents={one.amountCents} than="" />}
+                {one.amountCents !== undefined && <Difference cents={one.amountCents} />}
               </li>
             ))}
           </ul>

@@ -178,9 +178,9 @@ export function frontTemplate(build: FrontBuild): BufferGeometry {
   // A dark gap round the front, on the frame behind it, so that the reveal reads at a distance.
   builder.ring(
     [
-      { inset: metres(-22), z: 0.0006, light: 1 },
-      { inset: metres(-6), z: 0.0006, light: 0.55 },
-      { inset: 0, z: 0.0006, light: 0.22 },
+      { inset: metres(-26), z: 0.0006, light: 1 },
+      { inset: metres(-9), z: 0.0006, light: 0.42 },
+      { inset: 0, z: 0.0006, light: 0.12 },
     ],
     FRAME_GRAIN,
     [30, 31, 32, 33],

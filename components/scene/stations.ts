@@ -1,6 +1,6 @@
 import { Vector3 } from 'three';
 import type { Massing, Wall } from '@/lib/engine/types';
-import { inchesToMetres, metres, planToScene } from './space';
+import { axesOf, inchesToMetres, metres, planToScene } from './space';
 
 /** The eye's height above the floor, in inches. */
 export const EYE_INCHES = 60;
@@ -63,16 +63,29 @@ export function wallStation(massing: Massing, wallId: string, aspect: number): S
   };
 }
 
+/** The plan corners of a solid. */
+function planCorners(solid: Massing['solids'][number]): Vector3[] {
+  const { right, out } = axesOf(solid.facing);
+  const at = planToScene(solid.at, 0);
+  const across = right.multiplyScalar(metres(solid.width));
+  const back = out.multiplyScalar(-metres(solid.depth));
+  return [at, at.clone().add(across), at.clone().add(back), at.clone().add(across).add(back)];
+}
+
 /**
  * The station from which the whole room is seen: outside of the wall that hides least. Walls are seen only from
  * inside, so that the room lies open.
  */
 export function roomStation(massing: Massing, aspect: number): Station {
-  const xs = massing.outline.map((point) => point.x);
-  const ys = massing.outline.map((point) => point.y);
+  // What is built, not the empty rest of the room, fills the picture.
+  const built = massing.solids.filter((solid) => solid.cabinet !== null);
+  const points =
+    built.length > 0 ? built.flatMap(planCorners) : massing.outline.map((point) => planToScene(point, 0));
+  const xs = points.map((point) => point.x);
+  const zs = points.map((point) => point.z);
   const [west, east] = [Math.min(...xs), Math.max(...xs)];
-  const [south, north] = [Math.min(...ys), Math.max(...ys)];
-  const target = new Vector3(metres((west + east) / 2), 0, -metres((south + north) / 2));
+  const [near, far] = [Math.max(...zs), Math.min(...zs)];
+  const target = new Vector3((west + east) / 2, 0, (near + far) / 2);
   const directions = [
     new Vector3(0, 0, 1),
     new Vector3(0, 0, -1),
@@ -85,11 +98,11 @@ export function roomStation(massing: Massing, aspect: number): Station {
   // A step to the side shows the returning walls at different angles.
   const back = best.clone().applyAxisAngle(new Vector3(0, 1, 0), 0.2);
   const sideways = Math.abs(best.x) > 0.5;
-  const width = metres(sideways ? north - south : east - west);
-  const depth = metres(sideways ? east - west : north - south);
+  const width = sideways ? near - far : east - west;
+  const depth = sideways ? east - west : near - far;
   const middle = metres(massing.ceiling) / 2;
   const margin = inchesToMetres(4);
   // The far wall fills the picture; the near end may run out of it.
-  const distance = distanceFor(width / 2 + margin, middle + margin, aspect) + depth * 0.12;
+  const distance = distanceFor(width / 2 + margin, middle + margin, aspect) + depth * 0.18;
   return { target, back, distance, middle };
 }

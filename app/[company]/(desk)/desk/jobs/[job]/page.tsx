@@ -1,7 +1,7 @@
-import Link from 'next/link';
 import { notFound } from 'next/navigation';
 import { requireMember } from '@/app/[company]/member';
 import { InviteForm } from '@/components/desk/invite-form';
+import { Record } from '@/components/desk/record';
 import { Schedule } from '@/components/payment/schedule';
 import { StageRule } from '@/components/portal/stage-rule';
 import { ButtonLink } from '@/components/ui/button';
@@ -11,9 +11,11 @@ import { Table, Td, Th } from '@/components/ui/table';
 import type { InvitationState } from '@/lib/contracts/invitation';
 import { JOB_STAGE_NAMES } from '@/lib/contracts/states';
 import { paths } from '@/lib/paths';
+import { listChangeOrders } from '@/lib/services/change-order/list';
 import { listDraws } from '@/lib/services/draw/list';
 import { listInvitations } from '@/lib/services/invitation/list';
 import { readJob } from '@/lib/services/job/read';
+import { listPages } from '@/lib/services/page/list';
 
 export const metadata = { title: 'Job' };
 
@@ -31,9 +33,11 @@ export default async function DeskJobPage({ params }: { params: Promise<{ compan
   const job = await readJob(member, { jobId });
   if (!job.ok) notFound();
   const { name, number, address, stage, salesperson } = job.value;
-  const [invitations, schedule] = await Promise.all([
+  const [invitations, schedule, pages, orders] = await Promise.all([
     listInvitations(member, { jobId }),
     listDraws(member, { jobId }),
+    listPages(member, { jobId }),
+    listChangeOrders(member, { jobId }),
   ]);
   const people = invitations.ok ? invitations.value : [];
   return (
@@ -84,21 +88,12 @@ export default async function DeskJobPage({ params }: { params: Promise<{ compan
           <InviteForm company={company} jobId={jobId} />
         </Panel>
         <Panel title="Record">
-          <ul className="grid gap-2">
-            <li>
-              <Link href={paths.book(company, jobId)} className="text-brand underline underline-offset-4">
-                Job book
-              </Link>
-            </li>
-            <li>
-              <Link
-                href={paths.changeOrders(company, jobId)}
-                className="text-brand underline underline-offset-4"
-              >
-                Change orders
-              </Link>
-            </li>
-          </ul>
+          <Record
+            company={company}
+            jobId={jobId}
+            pages={pages.ok ? pages.value : []}
+            orders={orders.ok ? orders.value : []}
+          />
         </Panel>
       </div>
       {schedule.ok && <Schedule schedule={schedule.value} company={company} jobId={jobId} pays={false} />}

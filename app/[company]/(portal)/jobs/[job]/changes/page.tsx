@@ -42,7 +42,7 @@ export default async function ChangesPage({ params }: { params: Promise<{ compan
                     Change order {order.number}
                   </Link>
                 </h2>
-                <Difference cents={order.amountCents} than="" />
+                <Difference cents={order.amountCents} />
               </div>
               <p>{order.reason}</p>
               <p className="text-quiet">
