@@ -58,12 +58,11 @@ export function AskForChange({
     }
   }
 
+  // The tape says already that nothing differs from what was signed.
+  if (changes.length === 0) return null;
   return (
     <>
-      <Button
-        reason={reason ?? (changes.length === 0 ? 'Nothing differs from what was signed.' : null)}
-        onClick={() => setOpen(true)}
-      >
+      <Button reason={reason} onClick={() => setOpen(true)}>
         Ask for this change
       </Button>
       <Dialog

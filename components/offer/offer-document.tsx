@@ -110,65 +110,70 @@ function Sum({ label, strong, children }: { label: string; strong?: boolean; chi
 
 function Choices({ body }: { body: OfferBody }) {
   return (
-    <Table caption="Choices by part of the kitchen">
-      <thead>
-        <tr>
-          <Th>Where</Th>
-          <Th>Choice</Th>
-          <Th>Chosen</Th>
-        </tr>
-      </thead>
-      <tbody>
-        {body.choicesNamed.map((choice) => (
-          <tr key={`${choice.zone} ${choice.label}`}>
-            <Td>{zoneWord(choice.zone)}</Td>
-            <Td>{choice.label}</Td>
-            <Td>
-              <LengthText text={choice.option} />
-            </Td>
-          </tr>
-        ))}
-      </tbody>
-    </Table>
+    <dl className="grid gap-x-8 md:grid-cols-2">
+      {body.choicesNamed.map((choice) => (
+        <div
+          key={`${choice.zone} ${choice.label}`}
+          className="flex flex-wrap items-baseline justify-between gap-x-5 border-b border-hairline py-2"
+        >
+          <dt className="text-quiet">
+            {choice.label}
+            {choice.zone !== 'kitchen' && `, ${zoneWord(choice.zone).toLowerCase()}`}
+          </dt>
+          <dd className="font-semibold">
+            <LengthText text={choice.option} />
+          </dd>
+        </div>
+      ))}
+    </dl>
   );
+}
+
+/** Lines by part of the kitchen, in the order in which the page has them. */
+function linesByZone(body: OfferBody) {
+  const groups = new Map<OfferBody['lines'][number]['zone'], OfferBody['lines']>();
+  for (const line of body.lines) groups.set(line.zone, [...(groups.get(line.zone) ?? []), line]);
+  return [...groups].map(([zone, lines]) => ({
+    zone,
+    lines,
+    sum: lines.reduce((sum, line) => sum + line.amountCents, 0),
+  }));
 }
 
 function Lines({ body }: { body: OfferBody }) {
   return (
     <Table caption="Price lines">
-      <thead>
-        <tr>
-          <Th>What</Th>
-          <Th>Where</Th>
-          <Th numeric>Quantity</Th>
-          <Th numeric>Amount</Th>
-        </tr>
-      </thead>
-      <tbody>
-        {body.lines.map((line) => (
-          <tr key={line.code}>
-            <Td>
-              {line.label}
-              <div className="text-note text-quiet">
-                <LengthText text={line.because} />
-              </div>
-            </Td>
-            <Td>{zoneWord(line.zone)}</Td>
-            <Td numeric className="whitespace-nowrap">
-              {line.quantityText}
-            </Td>
-            <Td numeric>
-              <Money cents={line.amountCents} />
-            </Td>
+      {linesByZone(body).map(({ zone, lines, sum }) => (
+        <tbody key={zone}>
+          <tr>
+            <Th scope="rowgroup" className="pt-5 font-title text-lead font-semibold text-ink">
+              {zoneWord(zone)}
+            </Th>
+            <Th numeric className="pt-5 text-ink">
+              <Money cents={sum} />
+            </Th>
           </tr>
-        ))}
-      </tbody>
-      <tfoot>
+          {lines.map((line) => (
+            <tr key={line.code}>
+              <Td>
+                {line.label}, <span className="whitespace-nowrap">{line.quantityText}</span>
+                <div className="text-note text-quiet">
+                  <LengthText text={line.because} />
+                </div>
+              </Td>
+              <Td numeric>
+                <Money cents={line.amountCents} />
+              </Td>
+            </tr>
+          ))}
+        </tbody>
+      ))}
+      <tbody>
         <Foot label="Lines together" cents={body.subtotalCents} />
         {body.discountCents !== 0 && <Foot label="Discount" cents={-body.discountCents} />}
         <Foot label="Tax" cents={body.taxCents} />
         <Foot label="Total" cents={body.totalCents} strong />
-      </tfoot>
+      </tbody>
     </Table>
   );
 }
@@ -176,7 +181,7 @@ function Lines({ body }: { body: OfferBody }) {
 function Foot({ label, cents, strong }: { label: string; cents: number; strong?: boolean }) {
   return (
     <tr className={strong ? 'font-semibold' : undefined}>
-      <Td colSpan={3}>{label}</Td>
+      <Td>{label}</Td>
       <Td numeric>
         <Money cents={cents} />
       </Td>
@@ -187,20 +192,13 @@ function Foot({ label, cents, strong }: { label: string; cents: number; strong?:
 function Payments({ body }: { body: OfferBody }) {
   return (
     <Table caption="Schedule of payments">
-      <thead>
-        <tr>
-          <Th>Payment</Th>
-          <Th>Due</Th>
-          <Th numeric>Amount</Th>
-        </tr>
-      </thead>
       <tbody>
         {body.schedule.map((draw) => (
           <tr key={draw.number}>
             <Td>
               Payment {draw.number} of {body.schedule.length}, {draw.label}
+              <div className="text-note text-quiet">{draw.dueText}</div>
             </Td>
-            <Td>{draw.dueText}</Td>
             <Td numeric>
               <Money cents={draw.amountCents} />
             </Td>
