@@ -55,15 +55,15 @@ export function DoorOrderSheet({ order }: { order: DoorOrder }) {
         <tbody>
           {order.rows.map((row) => (
             <tr key={row.mark}>
-              <Td className="font-mono">{row.mark}</Td>
+              <Td className="font-mono whitespace-nowrap">{row.mark}</Td>
               <Td>
                 {KINDS[row.kind]}
                 {row.glass ? ', prepared for glass' : ''}
               </Td>
-              <Td numeric>
+              <Td numeric className="whitespace-nowrap">
                 <LengthText text={text(row.width)} />
               </Td>
-              <Td numeric>
+              <Td numeric className="whitespace-nowrap">
                 <LengthText text={text(row.height)} />
               </Td>
               <Td>{row.build === 'slab' ? `${row.style} (slab)` : row.style}</Td>

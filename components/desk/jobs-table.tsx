@@ -95,7 +95,7 @@ export function JobsTable({ company, rows }: { company: string; rows: readonly D
             {shown.map((row) => (
               <tr key={row.id} className="border-b border-hairline align-baseline">
                 <td className="px-2 py-3 text-right tabular-nums">{row.number}</td>
-                <td className="px-2 py-3">
+                <td className="min-w-44 px-2 py-3">
                   <Link
                     href={paths.deskJob(company, row.id)}
                     className="font-semibold text-brand underline underline-offset-4"

@@ -7,6 +7,7 @@ import { cents, formatCents } from '@/lib/engine/money';
 import type { CalendarDate, Choices, Takeoff } from '@/lib/engine/types';
 import type { Kitchen } from '../job/load-kitchen';
 import { DUE_TEXT, gatherFacts } from '../offer/body';
+import { choiceDifferences } from '../offer/differences';
 import { noticesFor } from '../offer/notices';
 import type { sealedBodies, DrawRow } from './find';
 
@@ -48,6 +49,7 @@ export async function buildChangeOrder(
       `This change gives back more than is still open to be paid. Please call ${kitchen.company.name} at ${kitchen.company.phone}.`,
     );
   const scope = [
+    ...choiceDifferences(last.body.choicesNamed, facts.choicesNamed).map((one) => one.text),
     ...explainDifference(signed, wanted).map((reason) => `${reason.text}.`),
     ...price.charges.map(
       (charge) =>

@@ -3,22 +3,35 @@ import { formatCents } from '@/lib/engine/money';
 
 const money = (cents: number) => formatCents(cents);
 
-/** What moved between two offers, in words, for somebody who read the first. */
-export function describeDifferences(before: OfferBody, after: OfferBody): OfferDifference[] {
-  const found: OfferDifference[] = [];
-  const named = (body: OfferBody) =>
-    new Map(body.choicesNamed.map((one) => [`${one.label}, ${one.zone}`, one.option]));
-  const old = named(before);
-  const now = named(after);
-  for (const key of new Set([...old.keys(), ...now.keys()])) {
+type Named = OfferBody['choicesNamed'];
+
+const PLACES: Readonly<Record<Named[number]['zone'], string>> = {
+  kitchen: '',
+  wall: ' of the wall cabinets',
+  base: ' of the base cabinets',
+  island: ' of the island or peninsula',
+  tall: ' of the tall cabinets',
+};
+
+/** Which choices differ, one sentence each. */
+export function choiceDifferences(before: Named, after: Named): OfferDifference[] {
+  const keyOf = (one: Named[number]) => `${one.label} ${one.zone}`;
+  const old = new Map(before.map((one) => [keyOf(one), one]));
+  const now = new Map(after.map((one) => [keyOf(one), one]));
+  return [...new Set([...old.keys(), ...now.keys()])].flatMap((key) => {
     const a = old.get(key);
     const b = now.get(key);
-    if (a === b) continue;
-    const [label] = key.split(', ');
-    if (a === undefined) found.push({ text: `${label ?? key}: ${b ?? ''} is new here.` });
-    else if (b === undefined) found.push({ text: `${label ?? key}: ${a} is gone here.` });
-    else found.push({ text: `${label ?? key}: ${b} instead of ${a}.` });
-  }
+    const one = b ?? a;
+    if (!one || a?.option === b?.option) return [];
+    const what = `${one.label}${PLACES[one.zone]}`;
+    if (a && b) return [{ text: `${what}: ${b.option} instead of ${a.option}.` }];
+    return [{ text: b ? `${what}: ${b.option}.` : `${what}: no longer chosen apart.` }];
+  });
+}
+
+/** What moved between two offers, in words, for somebody who read the first. */
+export function describeDifferences(before: OfferBody, after: OfferBody): OfferDifference[] {
+  const found: OfferDifference[] = choiceDifferences(before.choicesNamed, after.choicesNamed);
   const lines = (body: OfferBody) => new Map(body.lines.map((line) => [line.code, line]));
   const oldLines = lines(before);
   const newLines = lines(after);
