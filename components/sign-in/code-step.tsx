@@ -61,13 +61,13 @@ export function CodeStep({
   async function resend() {
     if (busy) return;
     setBusy(true);
+    // Emptied at the press: the new code may come, and be typed, before the answer does.
+    setCode('');
     const found = await onResend();
     setBusy(false);
     setProblem(found);
     beginWait(found?.waitSeconds ?? RESEND_SECONDS);
-    if (found) return;
-    setSent((count) => count + 1);
-    setCode('');
+    if (!found) setSent((count) => count + 1);
   }
 
   return (
