@@ -93,7 +93,7 @@ export default function RoomView(props: RoomViewProps) {
         dpr={machine.slow ? 1 : [1, 2]}
         shadows={false}
         camera={{ fov: FIELD_DEGREES, near: 0.1, far: 40 }}
-        gl={{ antialias: true, toneMapping: NeutralToneMapping, toneMappingExposure: 1.2 }}
+        gl={{ antialias: !machine.slow, toneMapping: NeutralToneMapping, toneMappingExposure: 1.2 }}
         onCreated={({ gl }) => {
           gl.shadowMap.enabled = !machine.slow;
           gl.shadowMap.type = PCFShadowMap;

@@ -3,6 +3,7 @@ import { ensureContractor } from './contractor';
 import { HOMEOWNERS, JOBS, QUILLBACK, STAFF, TERN_HOLLOW } from './demo';
 import { ensureInvited, ensureJob } from './job';
 import { ensureKitchens, ensurePriceBooks } from './kitchens';
+import { ensureSigned } from './signed';
 
 /** The staff's password in the demo, which stands on one machine alone. */
 const PASSWORD = 'veneer-and-stile-1974';
@@ -25,7 +26,23 @@ async function seed(): Promise<string[]> {
     thistleRow: await ensureJob(dov, JOBS.thistleRow),
   };
   await ensureKitchens({ rowan, dov }, jobs);
-  await ensureInvited(rowan, jobs.millRace.id, HOMEOWNERS.odile);
+  await ensureSigned({
+    company: TERN_HOLLOW.slug,
+    ines,
+    rowan,
+    job: jobs.millRace,
+    household: HOMEOWNERS.odile,
+    changes: [
+      {
+        change: { key: 'pull', zone: 'kitchen', option: 'bar-5-black' },
+        reason: 'Bars are easier to hold than the knobs.',
+      },
+      {
+        change: { key: 'finish', zone: 'base', option: 'paint-12' },
+        reason: 'We would like the base cabinets in spruce.',
+      },
+    ],
+  });
   await ensureInvited(rowan, jobs.alderYard.id, HOMEOWNERS.perrin);
   await ensureInvited(rowan, jobs.sorrelLane.id, HOMEOWNERS.mara);
   await ensureInvited(rowan, jobs.sorrelLane.id, HOMEOWNERS.teo);
@@ -38,6 +55,7 @@ async function seed(): Promise<string[]> {
     ...[HOMEOWNERS.mara, HOMEOWNERS.teo].map(
       ({ name, email }) => `  ${name}, homeowner: ${email}, by the invitation in the mailbox`,
     ),
+    `  ${HOMEOWNERS.odile.name}, homeowner of Mill Race: ${HOMEOWNERS.odile.email}, by a code by mail`,
     `2 contractors, ${Object.keys(jobs).length} jobs`,
   ];
 }

@@ -9,6 +9,7 @@ import { HOMEOWNERS, STAFF } from '@/db/seed/demo';
 import type { Worker } from '@/lib/contracts/actor';
 import { startClerkFake } from '@/lib/local/clerk/server';
 import { generateSecrets } from '@/lib/local/settings';
+import { startStripeFake } from '@/lib/local/stripe/server';
 import { cloneTestDatabase, type TestDatabase } from '@/lib/local/test-database';
 import { findCompanyBySlug } from '@/lib/services/company/find-by-slug';
 import { findMember } from '@/lib/services/person/find-member';
@@ -16,6 +17,7 @@ import { findMember } from '@/lib/services/person/find-member';
 let database: TestDatabase;
 let owner: postgres.Sql;
 let clerk: Awaited<ReturnType<typeof startClerkFake>>;
+let stripe: Awaited<ReturnType<typeof startStripeFake>>;
 const folder = mkdtempSync(path.join(tmpdir(), 'seed-'));
 
 beforeAll(async () => {
@@ -34,12 +36,22 @@ beforeAll(async () => {
     mailDomain: 'mail.example',
     webOrigin: process.env.APP_ORIGIN ?? '',
   });
-});
+  stripe = await startStripeFake({
+    port: 0,
+    stateFile: path.join(folder, 'stripe.json'),
+    secretKey: process.env.STRIPE_SECRET_KEY ?? '',
+    publishableKey: process.env.STRIPE_PUBLISHABLE_KEY ?? '',
+    webhookUrl: 'http://127.0.0.1:9',
+    webhookSecret: process.env.STRIPE_WEBHOOK_SECRET ?? '',
+    webOrigin: process.env.APP_ORIGIN ?? '',
+  });
+}, 60_000);
 
 afterAll(async () => {
   await closePool();
   await owner.end();
   await clerk.stop();
+  await stripe.stop();
   await database.drop();
   rmSync(folder, { recursive: true, force: true });
 });
@@ -47,7 +59,7 @@ afterAll(async () => {
 function seed(): Promise<{ code: number | null; said: string }> {
   return new Promise((resolve, reject) => {
     const child = spawn(process.execPath, ['--import', 'tsx', 'db/seed/seed.ts'], {
-      env: { ...process.env, CLERK_API_URL: clerk.origin },
+      env: { ...process.env, CLERK_API_URL: clerk.origin, STRIPE_API_BASE: stripe.origin },
       stdio: ['ignore', 'pipe', 'inherit'],
     });
     let said = '';
@@ -89,6 +101,24 @@ describe('the demo', () => {
     const before = await held();
     expect(await seed()).toEqual(first);
     expect(await held()).toEqual(before);
+  });
+
+  it('has Mill Race released with an approved change order and one that waits for the owner', async () => {
+    const company = await findCompanyBySlug('tern-hollow');
+    const worker: Worker = { kind: 'worker', companyId: company?.id ?? '' };
+    await withScope(worker, async (tx) => {
+      const job = await tx.query.jobs.findFirst({ where: (row, { eq }) => eq(row.name, 'Mill Race') });
+      expect(job?.stage).toBe('released');
+      const orders = await tx.query.changeOrders.findMany({ orderBy: (row, { asc }) => asc(row.number) });
+      expect(orders.map(({ number, state }) => [number, state])).toEqual([
+        [1, 'approved'],
+        [2, 'signed'],
+      ]);
+      const pages = await tx.query.pages.findMany({ orderBy: (row, { asc }) => asc(row.sequence) });
+      expect(pages.map(({ kind }) => kind)).toEqual(['agreement', 'changeOrder']);
+      const draws = await tx.query.draws.findMany({ orderBy: (row, { asc }) => asc(row.number) });
+      expect(draws.map(({ state }) => state)).toEqual(['paid', 'planned', 'planned', 'planned']);
+    });
   });
 
   it('keeps the staff of each contractor apart', async () => {
