@@ -9,7 +9,14 @@ test.afterAll(() => closePool());
 const COMPANY = 'tern-hollow';
 
 /** Every address of a job, with the methods it takes. Keys are those of `paths`, so that none is forgotten. */
-function addressesOf(ids: { job: string; scheme: string; offer: string; draw: string; order: string }): {
+function addressesOf(ids: {
+  job: string;
+  scheme: string;
+  offer: string;
+  draw: string;
+  order: string;
+  invitation: string;
+}): {
   pages: Record<string, string>;
   api: Record<string, readonly [string, readonly string[]]>;
 } {
