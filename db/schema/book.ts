@@ -18,7 +18,6 @@ import { editions, jobs, surveys } from './job';
 import { people } from './person';
 import { schemes } from './scheme';
 
-
 /** A difference asked for after signing. */
 export const changeOrders = pgTable(
   'change_orders',
